@@ -1,0 +1,136 @@
+/**
+ * What the core's runs take and give back. Metres, degrees, hours, W/m² and kWh/m²; times are UTC milliseconds.
+ * Months 0..11, hours 0..23 of local standard time at the place (whole-hour offset nearest to the longitude is
+ * not used: the caller passes `utcOffsetMinutes`).
+ */
+import type { Layout, Mount, MountEdge, Place, Plot, WinterRule } from './document';
+
+export interface RunInput {
+	place: Place;
+	plot: Plot;
+	layout: Layout;
+	winterRule: WinterRule;
+	/** Calendar year that is computed. */
+	year: number;
+	/** 1..20 minutes, mid-interval steps. */
+	stepMinutes: number;
+	/** Site standard-time offset used to sort results into days and clock hours. */
+	utcOffsetMinutes: number;
+	/** Years that the trees have grown since the plot was recorded. */
+	treeYears: number;
+}
+
+export interface TrackerShade {
+	trackerId: string;
+	tag: string;
+	/** 1 - beam with shade / beam without, over the year, 0..1. */
+	beamLoss: number;
+	/** Time-mean of the shaded share while the sun is up, 0..1. */
+	meanShadedShare: number;
+	/** Hours of the year with any shade from neighbours or obstacles. */
+	shadedHours: number;
+	/** Beam on the table without and with shade, kWh/m² a year. */
+	beamKwhM2: number;
+	beamLitKwhM2: number;
+	/** [month][hour]: beam loss in that month and hour, 0..1; null while there is no beam. */
+	monthHourLoss: (number | null)[][];
+	/** [month]: beam loss, 0..1. */
+	monthLoss: number[];
+	/** Shortest day: highest sun elevation at which it is still shaded, degrees; null when never shaded. */
+	shadedUpToDeg: number | null;
+	/** The winter rule for this tracker. */
+	meetsWinterRule: boolean;
+}
+
+export interface ShadeResult {
+	coreVersion: string;
+	model: { sun: string; beam: string; steps: number; daylightHours: number };
+	field: {
+		beamLoss: number;
+		meanShadedShare: number;
+		worstTrackerId: string | null;
+		monthLoss: number[];
+		monthHourLoss: (number | null)[][];
+		beamKwhM2: number;
+		beamLitKwhM2: number;
+	};
+	trackers: TrackerShade[];
+	shortestDay: DayShade;
+	winterRule: WinterVerdict;
+}
+
+export interface DayShade {
+	/** ISO date at the site, `2026-12-21`. */
+	date: string;
+	timesMs: number[];
+	sunAzimuthDeg: number[];
+	/** Apparent. */
+	sunElevationDeg: number[];
+	/** Mean over the field at each time. */
+	fieldShare: number[];
+	/** [tracker][time], 0..1. */
+	shares: number[][];
+	/** Beam lost to shade over beam without, this day. */
+	beamLoss: number;
+	/** Same, by tracker. */
+	trackerBeamLoss: number[];
+}
+
+export interface WinterVerdict {
+	rule: WinterRule;
+	date: string;
+	met: boolean;
+	/** Tags that break it, worst first. */
+	brokenBy: { trackerId: string; tag: string; shadedUpToDeg: number; minutes: number }[];
+	/** Sun elevation above which no tracker of the field is shaded on the shortest day; null when never shaded. */
+	clearAboveDeg: number | null;
+}
+
+export interface MountPlaceResult {
+	mount: Mount;
+	/** Hours of the year that the head is shaded while the sun is up (above the skyline). */
+	shadedHours: number;
+	/** Same with the sun above 5 degrees. */
+	shadedAbove5Hours: number;
+	/** Head shaded while at least half of its own table is lit, hours a year. */
+	blindHours: number;
+	/** Longest unbroken blind run on any day, minutes. */
+	longestBlindMinutes: number;
+	/** Longest unbroken head shade on any day with the sun above 3 degrees, minutes. */
+	longestRunMinutes: number;
+	longestRunDate: string | null;
+	/** Mean and worst minutes from first sun on the table to the head having it. */
+	runUpMeanMinutes: number;
+	runUpWorstMinutes: number;
+	/** [month]: blind hours. */
+	blindByMonth: number[];
+}
+
+export type MountClass = 'clear' | 'sound' | 'watch' | 'unfit';
+
+export interface TrackerMounts {
+	trackerId: string;
+	tag: string;
+	edges: Record<MountEdge, MountPlaceResult[]>;
+	best: MountPlaceResult;
+	/** Class of the best place and the measure that decides it, in words. */
+	bestClass: MountClass;
+	bestReason: string;
+	/** The field's common place on this tracker. */
+	common: MountPlaceResult;
+	commonClass: MountClass;
+	commonReason: string;
+}
+
+export interface MountResult {
+	coreVersion: string;
+	/** True when every table is alike, follows, and stands on level ground with no obstacle: neighbours never shade the top edge. */
+	levelGroundTruth: boolean;
+	common: Mount;
+	commonClassCounts: Record<MountClass, number>;
+	/** Share of trackers for which the common place is clear or sound, 0..1. */
+	commonServesShare: number;
+	/** Trackers for which the common place is worse than sound, with the place to use there. */
+	exceptions: { trackerId: string; tag: string; mount: Mount; class: MountClass; reason: string }[];
+	trackers: TrackerMounts[];
+}
