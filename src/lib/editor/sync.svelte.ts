@@ -1,0 +1,212 @@
+import { PendingCopyStore, type CopyStorage } from './pending-copy';
+import { sameData } from './same';
+import type { Stored, Transport } from './transport';
+
+export type SaveState = 'saved' | 'saving' | 'unsaved' | 'offline' | 'stale';
+
+/** Two versions of one document, neither of which may be lost without a choice. */
+export interface Conflict<T> {
+	mine: T;
+	theirs: T;
+	theirRevision: number;
+}
+
+interface SyncOptions<T> {
+	transport: Transport<T>;
+	/** Where unacknowledged work is kept; null keeps it in memory only. */
+	storage: CopyStorage | null;
+	storageKey: string;
+	revision: number;
+	/** Quiet time after an edit before it is sent. */
+	delayMs?: number;
+}
+
+const firstRetryMs = 1000;
+const longestRetryMs = 30_000;
+
+/**
+ * Keeps one document and its stored revision in step: sends the newest state a moment after the last edit, keeps a copy on
+ * the device until the server has it, tries again when the connection is back, and stops to ask when somebody else was first.
+ */
+export class DocumentSync<T> {
+	state = $state<SaveState>('saved');
+	/** Why it is not saved, as a sentence; null when all is well. */
+	message = $state<string | null>(null);
+	conflict = $state.raw<Conflict<T> | null>(null);
+	revision = $state(0);
+
+	#pending: T | null = null;
+	#busy = false;
+	#timer: ReturnType<typeof setTimeout> | null = null;
+	#retryMs = firstRetryMs;
+	readonly #transport: Transport<T>;
+	readonly #copies: PendingCopyStore<T>;
+	readonly #delayMs: number;
+
+	constructor(options: SyncOptions<T>) {
+		this.#transport = options.transport;
+		this.#copies = new PendingCopyStore(options.storage, options.storageKey);
+		this.#delayMs = options.delayMs ?? 700;
+		this.revision = options.revision;
+	}
+
+	get hasPending(): boolean {
+		return this.#pending !== null;
+	}
+
+	/** The document was edited. */
+	changed(document: T): void {
+		this.#pending = document;
+		const kept = this.#keepCopy(document);
+		this.message = kept ? null : 'This device has no room to keep a copy: stay online until it is saved.';
+		if (this.conflict) {
+			this.conflict = { ...this.conflict, mine: document };
+			return;
+		}
+		if (this.state !== 'offline') this.state = 'unsaved';
+		this.#schedule(this.#delayMs);
+	}
+
+	/**
+	 * Looks for work that an earlier visit could not save. `current` is what the server has now.
+	 * Answers the document to show, or null when there is nothing to restore.
+	 */
+	restore(current: T): T | null {
+		const copy = this.#copies.get();
+		if (!copy) return null;
+		if (sameData(copy.document, current)) {
+			this.#copies.drop();
+			return null;
+		}
+		this.#pending = copy.document;
+		if (copy.baseRevision === this.revision) {
+			this.state = 'unsaved';
+			this.#schedule(0);
+		} else {
+			this.#stop({ mine: copy.document, theirs: current, theirRevision: this.revision });
+		}
+		return copy.document;
+	}
+
+	/** Sends what is pending now. Safe to call at any time. */
+	async flush(): Promise<void> {
+		this.#cancelTimer();
+		if (this.#busy || this.#pending === null || this.conflict) return;
+		this.#busy = true;
+		this.state = 'saving';
+		try {
+			await this.#send(this.#pending);
+		} finally {
+			this.#busy = false;
+		}
+		if (this.#pending !== null && this.#timer === null && this.state === 'unsaved' && this.message === null) {
+			this.#schedule(this.#delayMs);
+		}
+	}
+
+	/** The connection is back: no need to wait for the next try. */
+	online(): void {
+		this.#retryMs = firstRetryMs;
+		if (this.state === 'offline') void this.flush();
+	}
+
+	/** Overwrites the other version with mine. */
+	async keepMine(): Promise<void> {
+		if (!this.conflict) return;
+		this.revision = this.conflict.theirRevision;
+		this.#pending = this.conflict.mine;
+		this.conflict = null;
+		this.#keepCopy(this.#pending);
+		this.state = 'unsaved';
+		await this.flush();
+	}
+
+	/** Gives up mine; answers the version to show. */
+	takeTheirs(): Stored<T> | null {
+		if (!this.conflict) return null;
+		const { theirs, theirRevision } = this.conflict;
+		this.adopt(theirRevision);
+		return { document: theirs, revision: theirRevision };
+	}
+
+	/** The page has the document of this revision now, with nothing pending. */
+	adopt(revision: number): void {
+		this.#settle(revision);
+		this.#copies.drop();
+	}
+
+	/** Stops the clockwork; the copy on the device stays. */
+	close(): void {
+		this.#cancelTimer();
+	}
+
+	async #send(sending: T): Promise<void> {
+		const outcome = await this.#transport.save(sending, this.revision);
+		if (outcome.kind === 'saved') this.#acknowledge(sending, outcome.revision);
+		else if (outcome.kind === 'stale') await this.#compare(sending);
+		else if (outcome.kind === 'unreachable') this.#retryLater(outcome.message);
+		else {
+			this.state = 'unsaved';
+			this.message = outcome.message;
+		}
+	}
+
+	#acknowledge(sent: T, revision: number): void {
+		this.#retryMs = firstRetryMs;
+		if (this.#pending === sent) {
+			this.adopt(revision);
+			return;
+		}
+		this.revision = revision;
+		if (this.#pending !== null) this.#keepCopy(this.#pending);
+		this.state = 'unsaved';
+	}
+
+	/** A refused revision may be our own earlier save whose answer was lost: then the contents agree. */
+	async #compare(sent: T): Promise<void> {
+		const stored = await this.#transport.load();
+		if (!stored) this.#retryLater('No connection. Your work is kept on this device and sent later.');
+		else if (sameData(stored.document, sent)) this.#acknowledge(sent, stored.revision);
+		else this.#stop({ mine: this.#pending ?? sent, theirs: stored.document, theirRevision: stored.revision });
+	}
+
+	#stop(conflict: Conflict<T>): void {
+		this.#cancelTimer();
+		this.conflict = conflict;
+		this.state = 'stale';
+		this.message = 'Somebody else saved a newer version. Choose which one to keep.';
+	}
+
+	#retryLater(message: string): void {
+		this.state = 'offline';
+		this.message = message;
+		this.#schedule(this.#retryMs);
+		this.#retryMs = Math.min(this.#retryMs * 2, longestRetryMs);
+	}
+
+	#settle(revision: number): void {
+		this.#cancelTimer();
+		this.#pending = null;
+		this.conflict = null;
+		this.message = null;
+		this.revision = revision;
+		this.state = 'saved';
+	}
+
+	#keepCopy(document: T): boolean {
+		return this.#copies.put({ document, baseRevision: this.revision, savedAtMs: Date.now() });
+	}
+
+	#schedule(delayMs: number): void {
+		this.#cancelTimer();
+		this.#timer = setTimeout(() => {
+			this.#timer = null;
+			void this.flush();
+		}, delayMs);
+	}
+
+	#cancelTimer(): void {
+		if (this.#timer !== null) clearTimeout(this.#timer);
+		this.#timer = null;
+	}
+}

@@ -1,0 +1,86 @@
+/** What came of one attempt to save a document. */
+export type SaveOutcome =
+	| { kind: 'saved'; revision: number }
+	/** Somebody else saved first: the revision that was edited is not the current one. */
+	| { kind: 'stale' }
+	/** The server could not be reached, or could not answer properly; trying again later is right. */
+	| { kind: 'unreachable'; message: string }
+	/** The server will not take this document as it is; trying again unchanged is useless. */
+	| { kind: 'refused'; message: string };
+
+export interface Stored<T> {
+	document: T;
+	revision: number;
+}
+
+export interface Transport<T> {
+	save(document: T, revision: number): Promise<SaveOutcome>;
+	load(): Promise<Stored<T> | null>;
+}
+
+interface Problem {
+	title?: string;
+	detail?: string;
+	errors?: { path: string; message: string }[];
+}
+
+async function readProblem(response: Response): Promise<string> {
+	const fallback = `The server answered ${response.status}.`;
+	if (!(response.headers.get('content-type') ?? '').includes('json')) return fallback;
+	const problem = (await response.json()) as Problem;
+	const first = problem.errors?.[0];
+	const sentence = problem.detail ?? problem.title ?? fallback;
+	return first ? `${sentence} ${first.path}: ${first.message}` : sentence;
+}
+
+/** Saves by PUT with `If-Match` and loads by GET at one address of the HTTP interface. */
+export function httpTransport<T>(url: string, fetcher: typeof fetch = fetch): Transport<T> {
+	return {
+		async save(document, revision) {
+			let response: Response;
+			try {
+				response = await fetcher(url, {
+					method: 'PUT',
+					headers: { 'content-type': 'application/json', 'if-match': `"${revision}"` },
+					body: JSON.stringify({ document })
+				});
+			} catch {
+				// fetch rejects only when no answer came at all: no network, or the server is down.
+				return {
+					kind: 'unreachable',
+					message: 'No connection. Your work is kept on this device and sent later.'
+				};
+			}
+			if (response.ok) {
+				const answer = (await response.json()) as { revision: number };
+				return { kind: 'saved', revision: answer.revision };
+			}
+			if (response.status === 412) return { kind: 'stale' };
+			if (response.status === 401) {
+				return {
+					kind: 'unreachable',
+					message: 'You are signed out. Your work is kept on this device; sign in again to save it.'
+				};
+			}
+			const message = await readProblem(response);
+			if (response.status >= 500 || response.status === 429) {
+				return {
+					kind: 'unreachable',
+					message: `${message} Your work is kept on this device and sent again.`
+				};
+			}
+			return { kind: 'refused', message };
+		},
+		async load() {
+			try {
+				const response = await fetcher(url, { headers: { accept: 'application/json' } });
+				if (!response.ok) return null;
+				const answer = (await response.json()) as Stored<T>;
+				return { document: answer.document, revision: answer.revision };
+			} catch {
+				// No answer: the caller stays as it is and asks again.
+				return null;
+			}
+		}
+	};
+}
