@@ -1,0 +1,4 @@
+export * from './clock';
+export * from './numbers';
+export * from './parse-coordinates';
+export * from './parse-quantity';
