@@ -78,6 +78,7 @@ export class RunWatch<R> {
 	async #adopt(run: Run): Promise<void> {
 		this.#letGo();
 		if (run.id !== this.run?.id) this.result = null;
+		this.fetching = false;
 		this.run = run;
 		if (isUnderway(run)) this.#follow(run.id);
 		else if (run.status === 'done') await this.#fetchResult(run.id);
