@@ -1,9 +1,10 @@
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
 import { defineConfig } from 'vitest/config';
+import { workerSource } from './scripts/worker-source-plugin.js';
 
 export default defineConfig({
-	plugins: [tailwindcss(), sveltekit()],
+	plugins: [workerSource(), tailwindcss(), sveltekit()],
 	test: {
 		environment: 'node',
 		include: ['src/**/*.test.ts', 'tests/**/*.test.ts'],

@@ -36,7 +36,9 @@ export const tokenSchema = z.strictObject({
 });
 export type TokenInfo = z.infer<typeof tokenSchema>;
 
-export const tokenDeleteSchema = z.strictObject({ id: idSchema });
+/** A token just made: the only time that its text is told. */
+export const madeTokenSchema = tokenSchema.extend({ token: z.string() });
+export type MadeToken = z.infer<typeof madeTokenSchema>;
 
 export const meSchema = z.strictObject({
 	id: idSchema,
@@ -52,9 +54,23 @@ export const invitationRequestSchema = z.strictObject({
 	projectId: idSchema.optional()
 });
 
-export const planRequestSchema = z.strictObject({
-	layoutId: idSchema,
-	reason: label(300, 'reason'),
-	title: label(120, 'title').optional()
+export const memberSchema = z.strictObject({
+	userId: idSchema,
+	name: z.string(),
+	email: z.string(),
+	role: roleSchema,
+	/** null for a member of the whole team. */
+	projectId: idSchema.nullable(),
+	projectName: z.string().nullable()
 });
-export type PlanRequest = z.input<typeof planRequestSchema>;
+export type Member = z.infer<typeof memberSchema>;
+
+export const invitationSchema = z.strictObject({
+	id: idSchema,
+	email: z.string(),
+	role: roleSchema,
+	projectId: idSchema.nullable(),
+	createdAt: moment,
+	expiresAt: moment
+});
+export type Invitation = z.infer<typeof invitationSchema>;

@@ -11,6 +11,7 @@ export * from './winter-rule';
 export * from './document-version';
 export * from './run';
 export * from './project';
+export * from './plan';
 export * from './compute';
 export * from './account';
 export * from './problem';

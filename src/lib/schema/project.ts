@@ -4,6 +4,7 @@ import { layoutSchema } from './layout';
 import { newPlaceSchema, placeSchema } from './place';
 import { plotSchema } from './plot';
 import { idSchema, label } from './quantity';
+import type { PlanSummary } from './plan';
 import type { Run } from './run';
 import { winterRuleSchema } from './winter-rule';
 
@@ -108,21 +109,6 @@ export const layoutRevisionSchema = z.strictObject({
 	savedAt: moment
 });
 export type LayoutRevision = z.infer<typeof layoutRevisionSchema>;
-
-/** A plan as lists show it. */
-export interface PlanSummary {
-	id: string;
-	projectId: string;
-	layoutId: string;
-	layoutRevision: number;
-	/** `A`, `B`, ... */
-	revision: string;
-	title: string;
-	reason: string;
-	issuedAt: string;
-	issuedBy: string;
-	files: { name: string; mediaType: string; bytes: number; sha256: string }[];
-}
 
 /** Everything that the pages of a project open with. */
 export interface OpenProject {

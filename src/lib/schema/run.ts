@@ -3,6 +3,7 @@ import type { RunInput } from '../core/results';
 import { layoutSchema } from './layout';
 import { placeSchema } from './place';
 import { plotSchema } from './plot';
+import { pageQuerySchema } from './page';
 import { idSchema, quantity, wholeNumber } from './quantity';
 import { winterRuleSchema } from './winter-rule';
 
@@ -69,3 +70,9 @@ export const runEventSchema = z.strictObject({
 	stage: z.string()
 });
 export type RunEvent = z.infer<typeof runEventSchema>;
+
+export const runListQuerySchema = pageQuerySchema.extend({
+	layoutId: idSchema.optional(),
+	kind: runKindSchema.optional()
+});
+export type RunListQuery = z.output<typeof runListQuerySchema>;

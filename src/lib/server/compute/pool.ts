@@ -1,0 +1,53 @@
+import { createHash } from 'node:crypto';
+import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { availableParallelism, tmpdir } from 'node:os';
+import { join } from 'node:path';
+import { Piscina } from 'piscina';
+import workerSource from './worker-entry.ts?worker-source';
+
+/** Threads for stored runs: all but one core, so that the server keeps answering. */
+export const RUN_THREADS = Math.max(1, Math.min(4, availableParallelism() - 1));
+
+/** One more thread than runs may take, so that a calculation asked for by the API never waits behind a long run. */
+const THREADS = RUN_THREADS + 1;
+
+/** Calculations that may wait for a thread before the server says that it is busy. */
+const MAX_WAITING = 64;
+
+interface RunningPool {
+	pool: Piscina;
+	folder: string;
+	sourceHash: string;
+}
+
+/** Kept across module reloads of the development server, which would otherwise leave threads behind. */
+const holder = globalThis as typeof globalThis & { tiltyardPool?: RunningPool };
+
+/** The pool of worker threads, started at first use. */
+export function computePool(): Piscina {
+	const sourceHash = createHash('sha256').update(workerSource).digest('hex');
+	if (holder.tiltyardPool && holder.tiltyardPool.sourceHash !== sourceHash) void stopPool();
+	if (!holder.tiltyardPool) {
+		const folder = mkdtempSync(join(tmpdir(), 'tiltyard-worker-'));
+		const filename = join(folder, 'worker.mjs');
+		writeFileSync(filename, workerSource);
+		const pool = new Piscina({
+			filename,
+			minThreads: 1,
+			maxThreads: THREADS,
+			idleTimeout: 60_000,
+			maxQueue: MAX_WAITING
+		});
+		holder.tiltyardPool = { pool, folder, sourceHash };
+	}
+	return holder.tiltyardPool.pool;
+}
+
+/** Stops every thread at once and takes the worker's file away. */
+export async function stopPool(): Promise<void> {
+	const running = holder.tiltyardPool;
+	if (!running) return;
+	holder.tiltyardPool = undefined;
+	await running.pool.destroy();
+	rmSync(running.folder, { recursive: true, force: true });
+}

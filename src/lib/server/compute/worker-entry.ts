@@ -1,0 +1,46 @@
+import { gzipSync } from 'node:zlib';
+import { fieldLoss, mountScene, mountYear, shadeScene, shadeYear } from '../../core';
+import { roundedJson } from './rounded-json';
+import type { PackedResult, WorkerCall } from './tasks';
+
+/** Fewest milliseconds between two messages about progress. */
+const PROGRESS_EVERY_MS = 100;
+
+/** What a worker thread runs. Bundled to one module; imports only the core. */
+export default function work(call: WorkerCall): unknown {
+	const { task } = call;
+	switch (task.kind) {
+		case 'shade-run':
+			return packed(call, (onProgress) => shadeYear(task.input, onProgress));
+		case 'mount-run':
+			return packed(call, (onProgress) => mountYear(task.input, undefined, onProgress));
+		case 'shade-scene':
+			return shadeScene(task.scene);
+		case 'mount-scene':
+			return mountScene(task.scene);
+		case 'field-loss':
+			return fieldLoss(task.request);
+	}
+}
+
+/** Runs a year, tells how far it is, and packs the result; null when it was stopped. */
+function packed(
+	call: WorkerCall,
+	compute: (onProgress: (done01: number) => boolean) => unknown
+): PackedResult | null {
+	const stop = call.stop ? new Int32Array(call.stop) : null;
+	const begun = performance.now();
+	let toldAt = begun;
+	const result = compute((done01) => {
+		const now = performance.now();
+		if (now - toldAt >= PROGRESS_EVERY_MS) {
+			toldAt = now;
+			call.port?.postMessage({ done01 });
+		}
+		return stop === null || Atomics.load(stop, 0) === 0;
+	});
+	if (result === null) return null;
+	const computeMs = performance.now() - begun;
+	const text = Buffer.from(roundedJson(result));
+	return { gzip: gzipSync(text, { level: 4 }), jsonBytes: text.byteLength, computeMs };
+}
