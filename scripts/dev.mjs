@@ -1,0 +1,48 @@
+import { spawn } from 'node:child_process';
+import { join } from 'node:path';
+import { openDatabase } from './lib/database.mjs';
+import { ensurePackages } from './lib/packages.mjs';
+import { root } from './lib/paths.mjs';
+import { endChild, isPortFree, stopOnSignal } from './lib/process.mjs';
+import { Refusal, runMain, say } from './lib/say.mjs';
+import { appEnvironment, demoLines } from './lib/settings.mjs';
+
+/** `npm run dev`: the database, the newest migration, and vite with reloading. */
+runMain(async () => {
+	const host = process.env.HOST ?? '127.0.0.1';
+	const port = Number(process.env.PORT ?? 5173);
+	if (!(await isPortFree(host, port)))
+		throw new Refusal(
+			`Port ${port} on ${host} is taken: stop what listens there or set PORT to another one.`
+		);
+	ensurePackages();
+	const database = await openDatabase();
+	const vite = spawn(
+		process.execPath,
+		[
+			join(root, 'node_modules/vite/bin/vite.js'),
+			'dev',
+			'--host',
+			host,
+			'--port',
+			String(port),
+			'--strictPort'
+		],
+		{
+			cwd: root,
+			stdio: ['ignore', 'inherit', 'inherit'],
+			detached: true,
+			env: appEnvironment({ url: database.url, ownDatabase: database.own, origin: `http://${host}:${port}` })
+		}
+	);
+	const stop = async () => {
+		await endChild(vite);
+		await database.stop();
+	};
+	stopOnSignal(stop);
+	vite.once('exit', async (code) => {
+		await database.stop();
+		process.exit(code ?? 1);
+	});
+	say(`\nTiltyard for work: http://${host}:${port}\n${demoLines().join('\n')}\n`);
+});

@@ -1,0 +1,21 @@
+import { join } from 'node:path';
+import { root } from './paths.mjs';
+
+/**
+ * Brings a database to the newest shape. A named lock keeps two processes from migrating at once.
+ * @param {string} url
+ */
+export async function migrateDatabase(url) {
+	const [{ createConnection }, { drizzle }, { migrate }] = await Promise.all([
+		import('mysql2/promise'),
+		import('drizzle-orm/mysql2'),
+		import('drizzle-orm/mysql2/migrator')
+	]);
+	const connection = await createConnection({ uri: url });
+	try {
+		await connection.query("SELECT GET_LOCK('tiltyard-migrate', 60)");
+		await migrate(drizzle({ client: connection }), { migrationsFolder: join(root, 'drizzle') });
+	} finally {
+		await connection.end();
+	}
+}

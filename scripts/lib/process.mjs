@@ -1,0 +1,84 @@
+import { createServer } from 'node:net';
+import { setTimeout as pause } from 'node:timers/promises';
+
+/** Whether a process with this id runs (also when it belongs to somebody else). */
+export function isRunning(/** @type {number} */ pid) {
+	try {
+		process.kill(pid, 0);
+		return true;
+	} catch (error) {
+		return /** @type {NodeJS.ErrnoException} */ (error).code === 'EPERM';
+	}
+}
+
+/** A port on loopback that nobody listens on at this moment. */
+export function freePort() {
+	return new Promise((/** @type {(port: number) => void} */ resolve, reject) => {
+		const probe = createServer();
+		probe.once('error', reject);
+		probe.listen(0, '127.0.0.1', () => {
+			const { port } = /** @type {import('node:net').AddressInfo} */ (probe.address());
+			probe.close(() => resolve(port));
+		});
+	});
+}
+
+/** Whether a listener could take this address now. */
+export function isPortFree(/** @type {string} */ host, /** @type {number} */ port) {
+	return new Promise((/** @type {(free: boolean) => void} */ resolve) => {
+		const probe = createServer();
+		probe.once('error', () => resolve(false));
+		probe.listen(port, host, () => probe.close(() => resolve(true)));
+	});
+}
+
+/**
+ * Asks a child to end and waits for it; kills it when it has not ended in time.
+ * @param {import('node:child_process').ChildProcess} child
+ */
+export async function endChild(child, /** @type {number} */ graceMs = 8000) {
+	if (child.exitCode !== null || child.signalCode !== null) return;
+	const ended = new Promise((resolve) => child.once('exit', resolve));
+	child.kill('SIGTERM');
+	const timer = setTimeout(() => child.kill('SIGKILL'), graceMs);
+	await ended;
+	clearTimeout(timer);
+}
+
+/**
+ * Repeats `attempt` until it answers true.
+ * @param {() => Promise<boolean> | boolean} attempt
+ * @returns {Promise<boolean>} false when the time ran out
+ */
+export async function waitUntil(
+	attempt,
+	/** @type {number} */ timeoutMs,
+	/** @type {number} */ everyMs = 100
+) {
+	const end = Date.now() + timeoutMs;
+	for (;;) {
+		if (await attempt()) return true;
+		if (Date.now() > end) return false;
+		await pause(everyMs);
+	}
+}
+
+/**
+ * Calls `stop` once on Ctrl-C, SIGTERM or hang-up, and then ends this process.
+ * @param {() => Promise<void>} stop
+ */
+export function stopOnSignal(stop) {
+	let stopping = false;
+	for (const signal of /** @type {NodeJS.Signals[]} */ (['SIGINT', 'SIGTERM', 'SIGHUP']))
+		process.on(signal, () => {
+			if (stopping) return;
+			stopping = true;
+			stop().then(
+				() => process.exit(0),
+				(error) => {
+					process.stderr.write(`${error?.stack ?? error}\n`);
+					process.exit(1);
+				}
+			);
+		});
+}
