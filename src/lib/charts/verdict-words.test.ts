@@ -1,0 +1,43 @@
+import { describe, expect, it } from 'vitest';
+import type { WinterVerdict } from '$lib/core/results';
+import { clearAboveSentence, ruleWords, verdictSentence } from './verdict-words';
+
+const above: WinterVerdict = {
+	rule: { kind: 'clear-above', elevationDeg: 12 },
+	date: '2026-12-21',
+	met: true,
+	brokenBy: [],
+	clearAboveDeg: 11.36
+};
+const b03 = { trackerId: 'b', tag: 'B03', shadedUpToDeg: 14.24, minutes: 35 };
+const a01 = { trackerId: 'a', tag: 'A01', shadedUpToDeg: 12.6, minutes: 10 };
+
+describe('the winter rule in words', () => {
+	it('says that a height rule is met', () => {
+		expect(verdictSentence(above)).toBe('Met: no tracker is shaded while the sun is above 12°.');
+		expect(clearAboveSentence(above)).toBe('All are in full sun once it stands above 11.4°.');
+	});
+
+	it('names the worst tracker and counts the others', () => {
+		expect(verdictSentence({ ...above, met: false, brokenBy: [b03] })).toBe(
+			'Not met: B03 is shaded up to 14.2°.'
+		);
+		expect(verdictSentence({ ...above, met: false, brokenBy: [b03, a01] })).toBe(
+			'Not met: B03 and 1 other are shaded up to 14.2°.'
+		);
+	});
+
+	it('speaks of solar hours for a window rule', () => {
+		const rule = { kind: 'clear-window', fromSolarHour: 9.5, toSolarHour: 14 } as const;
+		expect(ruleWords(rule)).toBe('No tracker is shaded from 09:30 to 14:00 solar time on the shortest day.');
+		expect(verdictSentence({ ...above, rule, met: false, brokenBy: [b03] })).toBe(
+			'Not met: B03 is shaded from 09:30 to 14:00 solar time.'
+		);
+	});
+
+	it('knows a field that is never shaded', () => {
+		expect(clearAboveSentence({ ...above, clearAboveDeg: null })).toBe(
+			'Nothing is shaded on the shortest day.'
+		);
+	});
+});
