@@ -1,5 +1,5 @@
 /** A project with its place, rule and plot, every plot that was saved, and a team's own tracker models. */
-import { index, int, mysqlTable, primaryKey, varchar } from 'drizzle-orm/mysql-core';
+import { index, int, mysqlTable, primaryKey, text, varchar } from 'drizzle-orm/mysql-core';
 import type { AnyMySqlColumn } from 'drizzle-orm/mysql-core';
 import type { Place, Plot, TrackerModel, WinterRule } from '../../../core/document';
 import { document, idColumn, moment } from '../columns';
@@ -14,6 +14,7 @@ export const projects = mysqlTable(
 			.notNull()
 			.references((): AnyMySqlColumn => teams.id, { onDelete: 'cascade' }),
 		name: varchar('name', { length: 120 }).notNull(),
+		notes: text('notes').notNull(),
 		place: document<Place>('place').notNull(),
 		winterRule: document<WinterRule>('winter_rule').notNull(),
 		plot: document<Plot>('plot').notNull(),

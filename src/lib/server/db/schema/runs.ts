@@ -1,7 +1,17 @@
 /** Computations: what was asked, with the whole input, how far it is, and what came out. */
-import { boolean, double, index, int, mysqlEnum, mysqlTable, text, varchar } from 'drizzle-orm/mysql-core';
-import type { MountResult, RunInput, ShadeResult } from '../../../core/results';
-import { document, idColumn, moment, sha256Column } from '../columns';
+import {
+	boolean,
+	double,
+	index,
+	int,
+	mysqlEnum,
+	mysqlTable,
+	primaryKey,
+	text,
+	varchar
+} from 'drizzle-orm/mysql-core';
+import type { RunInput } from '../../../core/results';
+import { bytes, document, idColumn, moment, sha256Column } from '../columns';
 import { layouts } from './layouts';
 import { users } from './people';
 import { projects } from './projects';
@@ -19,6 +29,10 @@ export const runs = mysqlTable(
 		kind: mysqlEnum('kind', ['shade', 'mounts']).notNull(),
 		layoutRevision: int('layout_revision').notNull(),
 		plotRevision: int('plot_revision').notNull(),
+		/** What the run was asked for, also inside its input: lists show these without reading the whole. */
+		year: int('year').notNull(),
+		stepMinutes: int('step_minutes').notNull(),
+		treeYears: double('tree_years').notNull(),
 		status: mysqlEnum('status', ['queued', 'working', 'done', 'failed', 'cancelled']).notNull(),
 		/** 0..1. */
 		progress: double('progress').notNull().default(0),
@@ -28,7 +42,6 @@ export const runs = mysqlTable(
 		inputHash: sha256Column('input_hash').notNull(),
 		coreVersion: varchar('core_version', { length: 32 }).notNull(),
 		input: document<RunInput>('input').notNull(),
-		result: document<ShadeResult | MountResult>('result'),
 		computeMs: double('compute_ms'),
 		error: text('error'),
 		cancelRequested: boolean('cancel_requested').notNull().default(false),
@@ -37,7 +50,11 @@ export const runs = mysqlTable(
 		startedAt: moment('started_at'),
 		finishedAt: moment('finished_at'),
 		/** Last sign of life of the process that works on it; an old one is taken up again. */
-		heartbeatAt: moment('heartbeat_at')
+		heartbeatAt: moment('heartbeat_at'),
+		/** Who works on it: a finished result of a process that lost the run is not taken. */
+		leaseId: idColumn('lease_id'),
+		/** How often it was taken up; a run that ends its process every time is given up. */
+		attempts: int('attempts').notNull().default(0)
 	},
 	(table) => [
 		index('runs_layout').on(table.layoutId, table.kind, table.createdAt),
@@ -45,4 +62,17 @@ export const runs = mysqlTable(
 		index('runs_status').on(table.status, table.createdAt),
 		index('runs_project').on(table.projectId)
 	]
+);
+
+/** Results as gzip of JSON, in parts that stay well under the server's packet limit. Written with the run's end. */
+export const runResults = mysqlTable(
+	'run_results',
+	{
+		runId: idColumn('run_id')
+			.notNull()
+			.references(() => runs.id, { onDelete: 'cascade' }),
+		part: int('part').notNull(),
+		bytes: bytes('bytes').notNull()
+	},
+	(table) => [primaryKey({ columns: [table.runId, table.part] })]
 );
