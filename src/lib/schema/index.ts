@@ -1,6 +1,7 @@
 /** Shapes of what crosses a border: documents, requests, answers, and what documents start with. */
 export * from './quantity';
 export * from './place';
+export * from './plot-checks';
 export * from './ring';
 export * from './plot';
 export * from './tracker-model';

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { BoundaryPart, Ground, Obstacle, Plot, SkylinePoint } from '../core/document';
 import { idSchema, quantity } from './quantity';
+import { strayHole } from './plot-checks';
 import { ringProblem } from './ring';
 
 /** Furthest that anything of a plot may lie from the origin, metres. */
@@ -18,14 +19,26 @@ const ringSchema = z
 	.array(planPointSchema, { error: 'Give a ring as a list of [eastM, northM].' })
 	.max(MAX_BOUNDARY_CORNERS, { error: `Keep a ring within ${MAX_BOUNDARY_CORNERS} corners: simplify it.` })
 	.superRefine((ring, context) => {
+		if (ring.length > MAX_BOUNDARY_CORNERS) return;
 		const problem = ringProblem(ring);
 		if (problem) context.addIssue({ code: 'custom', message: problem });
 	});
 
-export const boundaryPartSchema = z.strictObject({
-	outer: ringSchema,
-	holes: z.array(ringSchema).max(100, { error: 'Keep a part within 100 holes.' })
-}) satisfies z.ZodType<BoundaryPart>;
+export const boundaryPartSchema = z
+	.strictObject({
+		outer: ringSchema,
+		holes: z.array(ringSchema).max(100, { error: 'Keep a part within 100 holes.' })
+	})
+	.superRefine((part, context) => {
+		const stray = strayHole(part);
+		if (stray !== null) {
+			context.addIssue({
+				code: 'custom',
+				path: ['holes', stray - 1],
+				message: 'The hole does not lie inside its outline: move it in or take it out.'
+			});
+		}
+	}) satisfies z.ZodType<BoundaryPart>;
 
 export const boundarySchema = z
 	.array(boundaryPartSchema)
