@@ -16,6 +16,8 @@ export const layouts = mysqlTable(
 		/** Counts saves from 1. */
 		revision: int('revision').notNull(),
 		document: document<Layout>('document').notNull(),
+		/** Of the document, so that lists need not read it. */
+		trackerCount: int('tracker_count').notNull().default(0),
 		createdAt: moment('created_at').notNull(),
 		updatedAt: moment('updated_at').notNull()
 	},
@@ -30,6 +32,8 @@ export const layoutRevisions = mysqlTable(
 			.references(() => layouts.id, { onDelete: 'cascade' }),
 		revision: int('revision').notNull(),
 		document: document<Layout>('document').notNull(),
+		/** Of the document, so that lists need not read it. */
+		trackerCount: int('tracker_count').notNull().default(0),
 		authorId: idColumn('author_id').references(() => users.id, { onDelete: 'set null' }),
 		createdAt: moment('created_at').notNull()
 	},
