@@ -2,11 +2,6 @@ import { getContext, setContext } from 'svelte';
 import {
 	checkLayout,
 	fieldShade,
-	longestDate,
-	equinoxDate,
-	shortestDate,
-	sunDay,
-	sunPosition,
 	type DayShade,
 	type Layout,
 	type Plot,
@@ -15,9 +10,9 @@ import {
 } from '$lib/core';
 import { FieldCache } from './field-cache';
 import { emptyHistory, recordStep, redoStep, undoStep, type History } from './history';
+import { Moment } from './moment.svelte';
 import { PreviewClient } from './preview-client';
 import type { Documents, ProjectData, ProjectInfo } from './project-data';
-import { sameClockOn, siteDate, standardOffsetMinutes } from './site-time';
 import { DocumentSync, type SaveState } from './sync.svelte';
 import { httpTransport } from './transport';
 
@@ -45,6 +40,7 @@ export class ProjectStore {
 	models = $state.raw<TrackerModel[]>([]);
 	layoutId = $state('');
 	layoutName = $state('');
+	readonly moment: Moment;
 
 	/** The chosen day computed beside the page; null until it is there. */
 	day = $state.raw<DayShade | null>(null);
@@ -54,32 +50,17 @@ export class ProjectStore {
 	previewMs = $state<number | null>(null);
 	previewFailure = $state<string | null>(null);
 
-	#plotSync: DocumentSync<Plot>;
-	#layoutSync: DocumentSync<Layout>;
+	#plotSync = $state.raw<DocumentSync<Plot>>(undefined as never);
+	#layoutSync = $state.raw<DocumentSync<Layout>>(undefined as never);
 	#history = $state.raw<History<Documents>>(emptyHistory());
 	#gesture = $state.raw<{ label: string; before: Documents } | null>(null);
-	#date = $state('');
-	#timeMs = $state(0);
 	#fields = new FieldCache();
 	#userId: string;
 	#connected = false;
 	#preview: PreviewClient | null = null;
 
 	readonly readOnly = $derived(!editingRoles.includes(this.project.role));
-	readonly utcOffsetMinutes = $derived(
-		standardOffsetMinutes(
-			this.project.place.timeZone,
-			Number(this.#date.slice(0, 4)),
-			this.project.place.longitudeDeg
-		)
-	);
 	readonly field = $derived.by(() => this.#fields.get(this.project.place, this.plot, this.layout));
-	/** Apparent direction of the sun at the chosen moment. */
-	readonly sun = $derived.by(() => {
-		const { latitudeDeg, longitudeDeg } = this.project.place;
-		const position = sunPosition(this.#timeMs, latitudeDeg, longitudeDeg);
-		return { azimuthDeg: position.azimuthDeg, elevationDeg: position.apparentElevationDeg };
-	});
 	/** Shaded share of each tracker at the chosen moment, in layout order. */
 	readonly shares = $derived.by(() => fieldShade(this.field, this.sun));
 	readonly findings = $derived(checkLayout(this.plot, this.layout, this.project.place));
@@ -99,8 +80,7 @@ export class ProjectStore {
 		this.layoutName = data.layout.name;
 		this.#plotSync = this.#makePlotSync(data);
 		this.#layoutSync = this.#makeLayoutSync(data);
-		this.#date = shortestDate(data.project.place.latitudeDeg, new Date(nowMs).getUTCFullYear());
-		this.#timeMs = this.#morningOf(this.#date);
+		this.moment = new Moment(() => this.project.place, nowMs);
 	}
 
 	get plotRevision(): number {
@@ -131,34 +111,34 @@ export class ProjectStore {
 
 	/** The site's date that is looked at; setting it keeps the clock time. */
 	get date(): string {
-		return this.#date;
+		return this.moment.date;
 	}
 
 	set date(iso: string) {
-		if (iso === this.#date) return;
-		this.#timeMs = sameClockOn(iso, this.#timeMs, this.utcOffsetMinutes);
-		this.#date = iso;
+		this.moment.date = iso;
 	}
 
 	/** UTC milliseconds; setting it sets the date as well. */
 	get timeMs(): number {
-		return this.#timeMs;
+		return this.moment.timeMs;
 	}
 
 	set timeMs(ms: number) {
-		this.#timeMs = ms;
-		this.#date = siteDate(ms, this.utcOffsetMinutes);
+		this.moment.timeMs = ms;
+	}
+
+	/** Apparent direction of the sun at the chosen moment. */
+	get sun(): { azimuthDeg: number; elevationDeg: number } {
+		return this.moment.sun;
+	}
+
+	get utcOffsetMinutes(): number {
+		return this.moment.utcOffsetMinutes;
 	}
 
 	/** Dates worth a jump in the year that is looked at. */
 	get jumps(): { shortest: string; longest: string; equinox: string } {
-		const year = Number(this.#date.slice(0, 4));
-		const { latitudeDeg } = this.project.place;
-		return {
-			shortest: shortestDate(latitudeDeg, year),
-			longest: longestDate(latitudeDeg, year),
-			equinox: equinoxDate(year)
-		};
+		return this.moment.jumps;
 	}
 
 	modelOf(modelId: string): TrackerModel | null {
@@ -310,7 +290,7 @@ export class ProjectStore {
 			plot: this.plot,
 			layout: this.layout,
 			winterRule: this.project.winterRule,
-			date: this.#date,
+			date: this.date,
 			shortestDate: this.jumps.shortest,
 			stepMinutes: previewStepMinutes,
 			utcOffsetMinutes: this.utcOffsetMinutes
@@ -390,20 +370,6 @@ export class ProjectStore {
 			storageKey: `tiltyard.pending.${this.#userId}.layout.${data.layout.id}`,
 			revision: data.layout.revision
 		});
-	}
-
-	/** A telling first moment: the morning hour at which the sun has climbed to a third of its noon height. */
-	#morningOf(date: string): number {
-		const { place } = this.project;
-		const day = sunDay(date, place, this.utcOffsetMinutes);
-		const noonMs = day.transitMs ?? Date.parse(`${date}T12:00:00Z`) - this.utcOffsetMinutes * 60_000;
-		if (day.riseMs === null) return noonMs;
-		const height = (ms: number): number =>
-			sunPosition(ms, place.latitudeDeg, place.longitudeDeg).apparentElevationDeg;
-		const goalDeg = height(noonMs) / 3;
-		let ms = day.riseMs;
-		while (ms < noonMs && height(ms) < goalDeg) ms += 5 * 60_000;
-		return Math.round(ms / 300_000) * 300_000;
 	}
 }
 
