@@ -1,0 +1,207 @@
+import type { Layout, Plot, Tracker, TrackerModel } from '../document';
+import { groundGradient } from '../geometry/ground';
+import { lowestCornerM, reachRadiusM } from '../machine/reach';
+import { boundaryEdges, insideBoundary, segmentDistanceM } from './polygon';
+
+export type FindingKind =
+	'circles-overlap' | 'set-back' | 'outside' | 'double-tag' | 'low-corner' | 'no-boundary';
+
+/** Something in a layout that should be looked at before it is built. */
+export interface Finding {
+	kind: FindingKind;
+	trackerIds: string[];
+	/** A sentence for people. */
+	message: string;
+	/** How much is missing or overlaps, metres. */
+	amountM?: number;
+}
+
+/** A corner below this height above ground is reported, metres: common practice, no source. */
+export const LOW_CORNER_M = 0.5;
+/** Contacts within a millimetre are not findings: points come from grids with rounding. */
+const SLACK_M = 0.001;
+
+/** Buckets of a plan by square cells, so that near things are found without asking everything. */
+class CellIndex {
+	private readonly cells = new Map<string, number[]>();
+
+	constructor(private readonly sizeM: number) {}
+
+	private cell(value: number): number {
+		return Math.floor(value / this.sizeM);
+	}
+
+	addBox(index: number, west: number, south: number, east: number, north: number): void {
+		for (let x = this.cell(west); x <= this.cell(east); x++) {
+			for (let y = this.cell(south); y <= this.cell(north); y++) {
+				const key = `${x} ${y}`;
+				const list = this.cells.get(key);
+				if (list) list.push(index);
+				else this.cells.set(key, [index]);
+			}
+		}
+	}
+
+	at(x: number, y: number): readonly number[] {
+		return this.cells.get(`${this.cell(x)} ${this.cell(y)}`) ?? [];
+	}
+}
+
+const metres = (value: number): string => `${value.toFixed(2)} m`;
+
+interface Standing {
+	tracker: Tracker;
+	model: TrackerModel;
+	reach: number;
+}
+
+function overlapFindings(standing: readonly Standing[], largest: number): Finding[] {
+	const findings: Finding[] = [];
+	const index = new CellIndex(Math.max(1, 2 * largest));
+	standing.forEach(({ tracker: t, reach }, i) =>
+		index.addBox(i, t.eastM - reach, t.northM - reach, t.eastM + reach, t.northM + reach)
+	);
+	standing.forEach((a, i) => {
+		const seen = new Set<number>();
+		for (const dx of [-1, 1]) {
+			for (const dy of [-1, 1]) {
+				for (const j of index.at(a.tracker.eastM + dx * a.reach, a.tracker.northM + dy * a.reach)) {
+					if (j > i) seen.add(j);
+				}
+			}
+		}
+		for (const j of [...seen].sort((p, q) => p - q)) {
+			const b = standing[j];
+			const apart = Math.hypot(a.tracker.eastM - b.tracker.eastM, a.tracker.northM - b.tracker.northM);
+			const overlap = a.reach + b.reach - apart;
+			if (overlap <= SLACK_M) continue;
+			findings.push({
+				kind: 'circles-overlap',
+				trackerIds: [a.tracker.id, b.tracker.id],
+				message: `${a.tracker.tag} and ${b.tracker.tag}: reach circles overlap by ${metres(overlap)}.`,
+				amountM: overlap
+			});
+		}
+	});
+	return findings;
+}
+
+function boundaryFindings(plot: Plot, standing: readonly Standing[], largest: number): Finding[] {
+	const findings: Finding[] = [];
+	const edges = boundaryEdges(plot.boundary);
+	const setBack = Math.max(0, plot.setBackM);
+	const near = largest + setBack;
+	// Long edges fill many cells, so cells are not made much smaller than the land.
+	const extent = edges.reduce((m, e) => Math.max(m, Math.abs(e[2] - e[0]), Math.abs(e[3] - e[1])), 0);
+	const index = new CellIndex(Math.max(2 * near, extent / 64, 1));
+	edges.forEach(([x0, y0, x1, y1], k) =>
+		index.addBox(
+			k,
+			Math.min(x0, x1) - near,
+			Math.min(y0, y1) - near,
+			Math.max(x0, x1) + near,
+			Math.max(y0, y1) + near
+		)
+	);
+	for (const { tracker, reach } of standing) {
+		if (!insideBoundary(plot.boundary, tracker.eastM, tracker.northM)) {
+			findings.push({
+				kind: 'outside',
+				trackerIds: [tracker.id],
+				message: `${tracker.tag} stands outside the boundary.`
+			});
+			continue;
+		}
+		let distance = Infinity;
+		for (const k of index.at(tracker.eastM, tracker.northM)) {
+			distance = Math.min(distance, segmentDistanceM(tracker.eastM, tracker.northM, edges[k]));
+		}
+		const missing = reach + setBack - distance;
+		if (missing <= SLACK_M) continue;
+		findings.push({
+			kind: 'set-back',
+			trackerIds: [tracker.id],
+			message:
+				distance < reach
+					? `${tracker.tag}: its reach circle crosses the boundary by ${metres(reach - distance)}.`
+					: `${tracker.tag}: its reach circle is ${metres(distance - reach)} from the boundary; the set-back is ${metres(setBack)}.`,
+			amountM: missing
+		});
+	}
+	return findings;
+}
+
+function tagFindings(trackers: readonly Tracker[]): Finding[] {
+	const byTag = new Map<string, string[]>();
+	for (const { id, tag } of trackers) byTag.set(tag, [...(byTag.get(tag) ?? []), id]);
+	const findings: Finding[] = [];
+	for (const [tag, ids] of byTag) {
+		if (ids.length < 2) continue;
+		findings.push({
+			kind: 'double-tag',
+			trackerIds: ids,
+			message: `The tag ${tag} is used ${ids.length} times; give each tracker its own.`
+		});
+	}
+	return findings;
+}
+
+function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
+	const gradient = groundGradient(plot.ground);
+	const groups = new Map<string, { ids: string[]; model: TrackerModel; axisM: number }>();
+	for (const { tracker, model } of standing) {
+		const axisM = tracker.axisHeightM ?? model.axisHeightM;
+		const key = `${model.id} ${axisM}`;
+		const group = groups.get(key);
+		if (group) group.ids.push(tracker.id);
+		else groups.set(key, { ids: [tracker.id], model, axisM });
+	}
+	const findings: Finding[] = [];
+	for (const { ids, model, axisM } of groups.values()) {
+		const lowest = lowestCornerM(model, axisM, gradient);
+		if (lowest >= LOW_CORNER_M - SLACK_M) continue;
+		const who = `${model.name}, axis at ${metres(axisM)}`;
+		findings.push({
+			kind: 'low-corner',
+			trackerIds: ids,
+			message:
+				lowest < 0
+					? `${who}: its lowest corner would run ${metres(-lowest)} into the ground.`
+					: `${who}: its lowest corner comes down to ${metres(lowest)} above ground; ${metres(LOW_CORNER_M)} is common.`,
+			amountM: LOW_CORNER_M - lowest
+		});
+	}
+	return findings;
+}
+
+/**
+ * What is wrong or doubtful with a layout on its plot: circles that overlap, set-backs broken (holes included), trackers
+ * outside, tags used twice, corners near the ground. Trackers whose model is missing are passed over. Two thousand
+ * trackers take a few milliseconds: near things are found through cells.
+ */
+export function checkLayout(plot: Plot, layout: Layout): Finding[] {
+	const models = new Map(layout.models.map((model) => [model.id, model]));
+	const reaches = new Map(layout.models.map((model) => [model.id, reachRadiusM(model)]));
+	const standing: Standing[] = [];
+	let largest = 0;
+	for (const tracker of layout.trackers) {
+		const model = models.get(tracker.modelId);
+		if (!model) continue;
+		const reach = reaches.get(model.id) ?? 0;
+		largest = Math.max(largest, reach);
+		standing.push({ tracker, model, reach });
+	}
+	const findings = tagFindings(layout.trackers);
+	if (standing.length === 0) return findings;
+	if (plot.boundary.length === 0) {
+		findings.push({
+			kind: 'no-boundary',
+			trackerIds: [],
+			message: 'The plot has no boundary yet, so set-backs are not checked.'
+		});
+	} else {
+		findings.push(...boundaryFindings(plot, standing, largest));
+	}
+	findings.push(...overlapFindings(standing, largest), ...cornerFindings(plot, standing));
+	return findings;
+}
