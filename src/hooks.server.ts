@@ -1,7 +1,80 @@
-import type { ServerInit } from '@sveltejs/kit';
+import { error, redirect, type Handle, type HandleServerError, type ServerInit } from '@sveltejs/kit';
+import { authenticate } from '$lib/server/auth/authenticate';
 import { seedDemo } from '$lib/server/demo';
-import { seedsDemo } from '$lib/server/env';
+import { isLocal, origin, seedsDemo } from '$lib/server/env';
+import { asAppError, problemResponse } from '$lib/server/errors';
+import { refuseLongBody } from '$lib/server/http/body-limit';
+import { secure } from '$lib/server/http/headers';
+import { newRequestId } from '$lib/server/http/request-id';
+import { logger } from '$lib/server/log';
+import { startMail } from '$lib/server/mail';
 
 export const init: ServerInit = async () => {
+	await startMail();
 	if (seedsDemo()) await seedDemo();
+};
+
+export const handle: Handle = async ({ event, resolve }) => {
+	const began = performance.now();
+	const { locals, url, request } = event;
+	Object.assign(locals, { requestId: newRequestId(), actor: null, user: null, sessionId: null, token: null });
+	sendToOneAddress(request, url);
+
+	let response: Response;
+	try {
+		refuseLongBody(url.pathname, request.headers.get('content-length'));
+		await authenticate(event);
+		response = await resolve(event);
+	} catch (thrown) {
+		// Refused at the door; refusals further in are answered by the page or endpoint that was asked.
+		const refused = asAppError(thrown);
+		if (!refused) throw thrown;
+		if (!url.pathname.startsWith('/api/'))
+			error(refused.status, { message: refused.message, reference: locals.requestId });
+		response = problemResponse(refused, locals.requestId);
+	}
+	secure(response, url, locals.requestId);
+	if (url.pathname !== '/healthz')
+		logger.info({
+			requestId: locals.requestId,
+			method: request.method,
+			// A route with a secret in its address is logged without it.
+			path: event.params.token ? event.route.id : url.pathname,
+			status: response.status,
+			userId: locals.actor?.userId,
+			ms: Math.round(performance.now() - began)
+		});
+	return response;
+};
+
+/**
+ * A copy on one's own machine is opened as localhost as often as by its printed address, but sign-in and the
+ * check of where a form comes from hold for one address only: lead people there.
+ */
+function sendToOneAddress(request: Request, url: URL): void {
+	const home = origin();
+	const host = request.headers.get('host');
+	if (!isLocal() || !home || !host?.startsWith('localhost') || request.method !== 'GET') return;
+	const there = new URL(home);
+	if (there.host !== host && there.hostname === '127.0.0.1')
+		redirect(307, there.origin + url.pathname + url.search);
+}
+
+export const handleError: HandleServerError = ({ error: thrown, event, status, message }) => {
+	const reference = event.locals.requestId ?? newRequestId();
+	const refused = asAppError(thrown);
+	if (status === 404 && !refused)
+		return { message: 'There is nothing at this address, or it is not yours to see.', reference };
+	logger.error(
+		{ requestId: reference, route: event.route.id, method: event.request.method, status, error: thrown },
+		message
+	);
+	return {
+		message:
+			refused?.message ??
+			(status >= 500
+				? 'Something failed on our side. What you had saved is safe. Try again; if it happens again, tell the reference number.'
+				: message),
+		reference
+	};
 };

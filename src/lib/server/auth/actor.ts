@@ -1,0 +1,4 @@
+/** Who acts: the first argument of every use case. */
+export interface Actor {
+	userId: string;
+}
