@@ -132,6 +132,19 @@ describe('RunWatch', () => {
 		expect(watch.result).not.toBeNull();
 	});
 
+	it('learns that its run is out of date without fetching the result again', async () => {
+		const api = new FakeApi();
+		const fetched = vi.spyOn(api, 'result');
+		const watch = new RunWatch('project-1', 'shade', api);
+		await watch.resume(aRun({ status: 'done' }));
+		api.stored = aRun({ status: 'done', outOfDate: true });
+		await watch.refresh();
+		expect(watch.run?.outOfDate).toBe(true);
+		await watch.resume(aRun({ status: 'done', outOfDate: false }));
+		expect(watch.run?.outOfDate).toBe(false);
+		expect(fetched).toHaveBeenCalledTimes(1);
+	});
+
 	it('stops asking when the page is left', async () => {
 		const api = new FakeApi();
 		const watch = new RunWatch('project-1', 'shade', api);

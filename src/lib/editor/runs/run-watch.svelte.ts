@@ -41,7 +41,11 @@ export class RunWatch<R> {
 			this.result = null;
 			return;
 		}
-		if (run.id === this.run?.id && (this.working || this.result !== null || this.fetching)) return;
+		if (run.id === this.run?.id && (this.working || this.fetching)) return;
+		if (run.id === this.run?.id && this.result !== null) {
+			this.run = run;
+			return;
+		}
 		await this.#adopt(run);
 	}
 
@@ -57,6 +61,14 @@ export class RunWatch<R> {
 			return;
 		}
 		await this.#adopt(answer.value);
+	}
+
+	/** Asks again whether the stored run still stands for what is drawn now. */
+	async refresh(): Promise<void> {
+		const id = this.run?.id;
+		if (id === undefined || this.working) return;
+		const answer = await this.#api.read(id);
+		if (answer.ok && this.run?.id === id && !this.working && !this.#closed) this.run = answer.value;
 	}
 
 	async cancel(): Promise<void> {
