@@ -1,3 +1,4 @@
+import type { Role } from '$lib/access';
 import type { Layout, Place, Plot, TrackerModel, WinterRule } from '$lib/core';
 
 /** What the project pages load and the store works on. */
@@ -6,7 +7,7 @@ export interface ProjectInfo {
 	name: string;
 	place: Place;
 	winterRule: WinterRule;
-	role: string;
+	role: Role;
 }
 
 export interface ProjectData {

@@ -1,4 +1,5 @@
 import { getContext, setContext } from 'svelte';
+import { can } from '$lib/access';
 import {
 	checkLayout,
 	fieldShade,
@@ -22,7 +23,6 @@ export type { ProjectData, ProjectInfo } from './project-data';
 const previewQuietMs = 120;
 const previewStepMinutes = 5;
 const worstFirst: SaveState[] = ['stale', 'offline', 'saving', 'unsaved', 'saved'];
-const editingRoles = ['owner', 'designer'];
 
 interface EditOptions {
 	/** Edits in quick succession with one key become one undo step. */
@@ -59,11 +59,11 @@ export class ProjectStore {
 	#connected = false;
 	#preview: PreviewClient | null = null;
 
-	readonly readOnly = $derived(!editingRoles.includes(this.project.role));
+	readonly readOnly = $derived(!can(this.project.role, 'layout.edit'));
 	readonly field = $derived.by(() => this.#fields.get(this.project.place, this.plot, this.layout));
 	/** Shaded share of each tracker at the chosen moment, in layout order. */
 	readonly shares = $derived.by(() => fieldShade(this.field, this.sun));
-	readonly findings = $derived(checkLayout(this.plot, this.layout, this.project.place));
+	readonly findings = $derived(checkLayout(this.plot, this.layout));
 	readonly canUndo = $derived(this.#history.done.length > 0 && !this.readOnly);
 	readonly canRedo = $derived(this.#history.undone.length > 0 && !this.readOnly);
 	readonly undoLabel = $derived(this.#history.done.at(-1)?.label ?? null);
