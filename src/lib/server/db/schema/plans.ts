@@ -17,6 +17,7 @@ export const plans = mysqlTable(
 		layoutRevision: int('layout_revision').notNull(),
 		/** A, B, … Z, AA, … */
 		revisionLetter: varchar('revision_letter', { length: 4 }).notNull(),
+		title: varchar('title', { length: 120 }).notNull().default(''),
 		reason: text('reason').notNull(),
 		issuedBy: idColumn('issued_by').references(() => users.id, { onDelete: 'set null' }),
 		issuedAt: moment('issued_at').notNull(),

@@ -1,0 +1,1 @@
+ALTER TABLE `plans` ADD `title` varchar(120) DEFAULT '' NOT NULL;
