@@ -5,8 +5,8 @@ import { join } from 'node:path';
 import { Piscina } from 'piscina';
 import workerSource from './worker-entry.ts?worker-source';
 
-/** Threads for stored runs: all but one core, so that the server keeps answering. */
-export const RUN_THREADS = Math.max(1, Math.min(4, availableParallelism() - 1));
+/** Stored runs at once: at least two, so that a quick one does not wait behind a long one. */
+export const RUN_THREADS = Math.max(2, Math.min(4, availableParallelism() - 1));
 
 /** One more thread than runs may take, so that a calculation asked for by the API never waits behind a long run. */
 const THREADS = RUN_THREADS + 1;

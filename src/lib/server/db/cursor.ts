@@ -1,0 +1,30 @@
+import { AppError } from '../errors';
+
+/** Where a page ended, as an opaque text for the next call. */
+export function writeCursor(parts: (string | number)[]): string {
+	return Buffer.from(JSON.stringify(parts)).toString('base64url');
+}
+
+/** The parts of a cursor; anything that we did not write is refused. */
+export function readCursor(text: string, kinds: ('string' | 'number')[]): (string | number)[] {
+	const parts = parsed(text);
+	const fits =
+		Array.isArray(parts) &&
+		parts.length === kinds.length &&
+		parts.every((part, index) => typeof part === kinds[index]);
+	if (!fits) {
+		throw new AppError('invalid', 'This cursor is not one of ours.', {
+			errors: [{ path: 'cursor', message: 'Start from the first page and follow nextCursor.' }]
+		});
+	}
+	return parts as (string | number)[];
+}
+
+function parsed(text: string): unknown {
+	try {
+		return JSON.parse(Buffer.from(text, 'base64url').toString('utf8'));
+	} catch (error) {
+		if (error instanceof SyntaxError) return null;
+		throw error;
+	}
+}
