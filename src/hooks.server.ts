@@ -73,7 +73,7 @@ export const handleError: HandleServerError = ({ error: thrown, event, status, m
 		message:
 			refused?.message ??
 			(status >= 500
-				? 'Something failed on our side. What you had saved is safe. Try again; if it happens again, tell the reference number.'
+				? `Something failed on our side. What you had saved is safe. Try again; if it happens again, tell the reference ${reference}.`
 				: message),
 		reference
 	};

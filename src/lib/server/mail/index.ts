@@ -31,14 +31,19 @@ export async function startMail(): Promise<void> {
 	if (!transport) logger.warn('SMTP_URL is not set: no letters can be sent, so forgotten passwords stay so');
 }
 
-export async function sendLetter(letter: Letter): Promise<void> {
+/** Throws when this copy can't send letters at all. */
+export async function requireMail(): Promise<Transporter> {
 	shelf.tiltyardMail ??= open();
 	const transport = await shelf.tiltyardMail;
-	if (!transport)
-		throw new AppError(
-			'unavailable',
-			'This copy can send no letters: whoever runs it has to set SMTP_URL. Ask them for help with your account.'
-		);
+	if (transport) return transport;
+	throw new AppError(
+		'unavailable',
+		'This copy can send no letters: whoever runs it has to set SMTP_URL. Ask them for help with your account.'
+	);
+}
+
+export async function sendLetter(letter: Letter): Promise<void> {
+	const transport = await requireMail();
 	await transport.sendMail({ from: mailFrom(), ...letter });
 	logger.info({ subject: letter.subject }, 'letter sent');
 }

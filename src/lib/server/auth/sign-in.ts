@@ -1,0 +1,30 @@
+import { eq } from 'drizzle-orm';
+import type { SignInForm } from '$lib/schema/sign-forms';
+import type { Actor } from './actor';
+import { db } from '../db';
+import { users } from '../db/schema';
+import { AppError } from '../errors';
+import { countAttempt, forgiveAttempts } from './attempts';
+import { passwordFits } from './password';
+
+/**
+ * Who signs in with this address and password. The answer is the same for a wrong password and an unknown address.
+ * @param host where the request came from
+ */
+export async function signIn(form: SignInForm, host: string): Promise<Actor> {
+	await countAttempt('sign-in-host', host);
+	await countAttempt('sign-in', `${form.email} ${host}`);
+	const [user] = await db.select().from(users).where(eq(users.email, form.email));
+	if (!(await passwordFits(user?.passwordHash ?? null, form.password)))
+		throw new AppError('invalid', 'This address and password do not belong together.', {
+			errors: [
+				{
+					path: 'password',
+					message: 'This address and password do not belong together. Check both, or set a new password.'
+				}
+			]
+		});
+	await forgiveAttempts('sign-in', `${form.email} ${host}`);
+	await forgiveAttempts('sign-in-host', host);
+	return { userId: user.id };
+}
