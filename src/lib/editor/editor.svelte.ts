@@ -3,6 +3,7 @@ import { SvelteSet } from 'svelte/reactivity';
 import { nextTags, type PlanPoint, type Tracker, type TrackerModel } from '$lib/core';
 import type { AlignGuide } from './kernels/align';
 import { addTrackers, removeTrackers } from './kernels/layout-edit';
+import { tagForOne } from './kernels/single-tag';
 import type { PlanBox } from './kernels/pick';
 import type { ProjectStore } from './project-store.svelte';
 
@@ -98,11 +99,14 @@ export class Editor {
 		const base = options.replace
 			? removeTrackers(store.layout, new Set(store.layout.trackers.map(({ id }) => id)))
 			: store.layout;
-		const tags = nextTags(
-			base.trackers.map(({ tag }) => tag),
-			points,
-			{ turnDeg: options.turnDeg, rowToleranceM: options.rowToleranceM }
-		);
+		const tags =
+			points.length === 1
+				? [tagForOne(base.trackers, points[0])]
+				: nextTags(
+						base.trackers.map(({ tag }) => tag),
+						points,
+						{ turnDeg: options.turnDeg, rowToleranceM: options.rowToleranceM }
+					);
 		const added = points.map((point, index) => ({ id: newTrackerId(), tag: tags[index], point }));
 		store.replaceLayout(label, addTrackers(base, model, added));
 		this.selected = added.map(({ id }) => id);

@@ -1,7 +1,9 @@
 import { equinoxDate, longestDate, shortestDate, sunDay, sunPosition, type Place } from '$lib/core';
-import { sameClockOn, siteDate, standardOffsetMinutes } from './site-time';
+import { formatClock, isoDateAt, standardOffsetMinutes, timeAtSite } from '$lib/i18n';
 
 const fiveMinutesMs = 300_000;
+/** A time further than this from the noon of the date belongs to another date; the hour more than half a day is for summer time. */
+const withinDayMs = 13 * 3_600_000;
 
 /** The moment that is looked at: a date of the site, a time, and the sun then. */
 export class Moment {
@@ -9,10 +11,10 @@ export class Moment {
 	#date = $state('');
 	#timeMs = $state(0);
 
-	readonly utcOffsetMinutes = $derived.by(() => {
-		const { timeZone, longitudeDeg } = this.#place();
-		return standardOffsetMinutes(timeZone, Number(this.#date.slice(0, 4)), longitudeDeg);
-	});
+	/** The site's standard time, by which results are sorted into days. */
+	readonly utcOffsetMinutes = $derived.by(() =>
+		standardOffsetMinutes(Number(this.#date.slice(0, 4)), this.#place().timeZone)
+	);
 
 	/** Apparent direction of the sun. */
 	readonly sun = $derived.by(() => {
@@ -43,10 +45,12 @@ export class Moment {
 		return this.#date;
 	}
 
-	/** Setting the date keeps the clock time. */
+	/** Setting the date keeps the site's clock time. */
 	set date(iso: string) {
 		if (iso === this.#date) return;
-		this.#timeMs = sameClockOn(iso, this.#timeMs, this.utcOffsetMinutes);
+		const { timeZone } = this.#place();
+		const [hours, minutes] = formatClock(this.#timeMs, timeZone).split(':').map(Number);
+		this.#timeMs = timeAtSite(iso, hours * 60 + minutes, timeZone);
 		this.#date = iso;
 	}
 
@@ -55,16 +59,19 @@ export class Moment {
 		return this.#timeMs;
 	}
 
+	/** Setting a time of another day sets the date as well. */
 	set timeMs(ms: number) {
 		this.#timeMs = ms;
-		this.#date = siteDate(ms, this.utcOffsetMinutes);
+		const { timeZone } = this.#place();
+		if (Math.abs(ms - timeAtSite(this.#date, 720, timeZone)) > withinDayMs)
+			this.#date = isoDateAt(ms, timeZone);
 	}
 
 	/** A telling moment: when the sun has climbed to a third of its noon height, to five minutes. */
 	#morning(): number {
 		const place = this.#place();
 		const day = sunDay(this.#date, place, this.utcOffsetMinutes);
-		const noonMs = day.transitMs ?? Date.parse(`${this.#date}T12:00:00Z`) - this.utcOffsetMinutes * 60_000;
+		const noonMs = day.transitMs ?? timeAtSite(this.#date, 720, place.timeZone);
 		if (day.riseMs === null) return noonMs;
 		const heightDeg = (ms: number): number =>
 			sunPosition(ms, place.latitudeDeg, place.longitudeDeg).apparentElevationDeg;
