@@ -1,0 +1,269 @@
+import type { Ground, Obstacle, PlanPoint, Plot } from '../core';
+import { formatNumber } from '../i18n';
+import type { PegRow } from '../schema/peg-row';
+import type { PaperPoint } from './drawing';
+import { insetLines } from './inset-lines';
+import type { Extent, MapFrame } from './map-scale';
+import type { Pen } from './pen';
+import type { PlacedTag } from './place-tags';
+import { sheetColours as c } from './sheet-colours';
+import { simplifyRing } from './simplify-ring';
+
+/** Line kinds of the map; the legend shows the same. */
+export const mapStrokes = {
+	boundary: { colour: c.ink, widthMm: 0.6 },
+	setBack: { colour: c.inkSoft, widthMm: 0.3, dashMm: [3, 1.2] },
+	reach: { colour: c.stop, widthMm: 0.25 },
+	cross: { colour: c.ink, widthMm: 0.35 },
+	contour: { colour: c.hair, widthMm: 0.18 },
+	other: { colour: c.faint, widthMm: 0.18 },
+	tree: { colour: c.clear, widthMm: 0.25, dashMm: [0.8, 0.6] },
+	box: { colour: c.ink, widthMm: 0.3 }
+};
+
+/** Corners that deviate less than this on the paper are not drawn. */
+const DRAWN_MM = 0.04;
+const CROSS_ARM_MM = 1.2;
+
+export function drawGround(pen: Pen, ground: Ground, map: MapFrame): void {
+	if (ground.kind !== 'plane' || ground.risePercent <= 0) return;
+	const a = (ground.riseTowardsDeg * Math.PI) / 180;
+	const gradient = ground.risePercent / 100;
+	const intervalM = contourIntervalM(ground.risePercent, map.mmPerM);
+	const { minEastM, maxEastM, minNorthM, maxNorthM } = map.shown;
+	const corners: PlanPoint[] = [
+		[minEastM, minNorthM],
+		[maxEastM, minNorthM],
+		[maxEastM, maxNorthM],
+		[minEastM, maxNorthM]
+	];
+	const levels = corners.map(([e, n]) => ground.heightM + gradient * (e * Math.sin(a) + n * Math.cos(a)));
+	const reachM = Math.hypot(maxEastM - minEastM, maxNorthM - minNorthM);
+	const middle: PlanPoint = [(minEastM + maxEastM) / 2, (minNorthM + maxNorthM) / 2];
+	const first = Math.ceil(Math.min(...levels) / intervalM);
+	for (let i = first; i * intervalM <= Math.max(...levels); i += 1) {
+		const level = i * intervalM;
+		const along = middle[0] * Math.cos(a) - middle[1] * Math.sin(a);
+		const up = (level - ground.heightM) / gradient;
+		const at = (s: number): PlanPoint => [
+			up * Math.sin(a) + (along + s) * Math.cos(a),
+			up * Math.cos(a) - (along + s) * Math.sin(a)
+		];
+		pen.line('ground', map.toPaper(at(-reachM)), map.toPaper(at(reachM)), mapStrokes.contour);
+		const end = lastInside(map, at, reachM);
+		if (end) {
+			pen.text('ground', end, formatNumber(level, intervalM < 1 ? 2 : 0), {
+				colour: c.faint,
+				anchor: 'middle'
+			});
+		}
+	}
+}
+
+/** A spot on a contour a little inside the window's edge, on the paper. */
+function lastInside(map: MapFrame, at: (s: number) => PlanPoint, reachM: number): PaperPoint | null {
+	const { xMm, yMm, widthMm, heightMm } = map.window;
+	for (let k = 200; k >= -200; k -= 1) {
+		const [x, y] = map.toPaper(at((reachM * k) / 200));
+		if (x > xMm + 16 && x < xMm + widthMm - 7 && y > yMm + 7 && y < yMm + heightMm - 9) return [x, y - 0.5];
+	}
+	return null;
+}
+
+/** A round interval that puts contours at least 14 mm apart on the paper. */
+export function contourIntervalM(risePercent: number, mmPerM: number): number {
+	const least = (14 / mmPerM) * (risePercent / 100);
+	const power = 10 ** Math.floor(Math.log10(least));
+	return [1, 2, 5, 10].map((k) => k * power).find((step) => step >= least) ?? 10 * power;
+}
+
+/** Crosses of the local grid with its metres written at the window's edge. */
+export function drawGrid(pen: Pen, map: MapFrame): void {
+	const stepM = [10, 20, 50, 100, 200, 500, 1000, 2000, 5000, 10_000, 20_000].find(
+		(s) => s * map.mmPerM >= 38
+	);
+	if (!stepM) return;
+	const { minEastM, maxEastM, minNorthM, maxNorthM } = map.shown;
+	const { xMm, yMm, widthMm, heightMm } = map.window;
+	const stroke = { colour: c.hair, widthMm: 0.18 };
+	const ticks = (min: number, max: number) => {
+		const values: number[] = [];
+		for (let v = Math.ceil(min / stepM) * stepM; v <= max; v += stepM) values.push(v);
+		return values;
+	};
+	const easts = ticks(minEastM, maxEastM);
+	const norths = ticks(minNorthM, maxNorthM);
+	for (const e of easts) {
+		const [x] = map.toPaper([e, 0]);
+		if (x < xMm + 14 || x > xMm + widthMm - 10) continue;
+		pen.line('ground', [x, yMm + heightMm], [x, yMm + heightMm - 2.5], { colour: c.ink, widthMm: 0.25 });
+		pen.text('ground', [x, yMm + heightMm - 3.6], `E ${formatNumber(e)}`, {
+			anchor: 'middle',
+			colour: c.inkSoft
+		});
+		for (const n of norths) {
+			const [, y] = map.toPaper([0, n]);
+			pen.line('ground', [x - 1.5, y], [x + 1.5, y], stroke);
+			pen.line('ground', [x, y - 1.5], [x, y + 1.5], stroke);
+		}
+	}
+	for (const n of norths) {
+		const [, y] = map.toPaper([0, n]);
+		if (y < yMm + 4 || y > yMm + heightMm - 8) continue;
+		pen.line('ground', [xMm, y], [xMm + 2.5, y], { colour: c.ink, widthMm: 0.25 });
+		pen.text('ground', [xMm + 3.4, y + 0.9], `N ${formatNumber(n)}`, { colour: c.inkSoft });
+	}
+}
+
+export function drawPlot(pen: Pen, plot: Plot, map: MapFrame): void {
+	const parts = plot.boundary.map((part) => ({
+		outer: simplifyRing(part.outer, DRAWN_MM / map.mmPerM),
+		holes: part.holes.map((hole) => simplifyRing(hole, DRAWN_MM / map.mmPerM))
+	}));
+	for (const part of parts) {
+		for (const ring of [part.outer, ...part.holes]) {
+			const points = ring.map((p) => map.toPaper(p));
+			pen.polygon('boundary', [points], { stroke: mapStrokes.boundary });
+			drawCornerMarks(pen, points);
+		}
+	}
+	if (plot.setBackM > 0 && parts.length > 0) {
+		const chains = joinPieces(insetLines(parts, plot.setBackM));
+		for (const chain of chains) {
+			pen.path(
+				'set-back',
+				chain.map((p) => map.toPaper(p)),
+				mapStrokes.setBack
+			);
+		}
+	}
+}
+
+/** A small square at each corner, left out where the last one stands nearer than 1.6 mm. */
+function drawCornerMarks(pen: Pen, points: PaperPoint[]): void {
+	let last: PaperPoint | null = null;
+	for (const [x, y] of points) {
+		if (last && Math.hypot(x - last[0], y - last[1]) < 1.6) continue;
+		last = [x, y];
+		pen.rect(
+			'boundary',
+			{ xMm: x - 0.7, yMm: y - 0.7, widthMm: 1.4, heightMm: 1.4 },
+			{ fill: { colour: c.white }, stroke: { colour: c.ink, widthMm: 0.3 } }
+		);
+	}
+}
+
+/** Pieces that meet end to start as long lines, so that their dashes run on. */
+export function joinPieces(pieces: { from: PlanPoint; to: PlanPoint }[]): PlanPoint[][] {
+	const key = ([x, y]: PlanPoint) => `${Math.round(x * 1e4)},${Math.round(y * 1e4)}`;
+	const starts = new Map<string, number[]>();
+	pieces.forEach((piece, i) => {
+		const at = starts.get(key(piece.from));
+		if (at) at.push(i);
+		else starts.set(key(piece.from), [i]);
+	});
+	const ends = new Set(pieces.map((piece) => key(piece.to)));
+	const used = new Set<number>();
+	const chains: PlanPoint[][] = [];
+	// Open lines first, from their free ends; what is left then runs in rings.
+	const order = pieces
+		.map((_, i) => i)
+		.sort((a, b) => Number(ends.has(key(pieces[a].from))) - Number(ends.has(key(pieces[b].from))));
+	for (const start of order) {
+		if (used.has(start)) continue;
+		const chain: PlanPoint[] = [pieces[start].from];
+		for (let i: number | undefined = start; i !== undefined;) {
+			used.add(i);
+			chain.push(pieces[i].to);
+			i = starts.get(key(pieces[i].to))?.find((next) => !used.has(next));
+		}
+		chains.push(chain);
+	}
+	return chains;
+}
+
+export function drawObstacles(pen: Pen, obstacles: Obstacle[], map: MapFrame): void {
+	for (const obstacle of obstacles) {
+		const centre = map.toPaper([obstacle.eastM, obstacle.northM]);
+		if (obstacle.kind === 'tree') {
+			pen.circle('obstacles', centre, obstacle.crownRadiusM * map.mmPerM, {
+				fill: { colour: c.clearTint, opacity: 0.7 },
+				stroke: mapStrokes.tree
+			});
+			pen.circle('obstacles', centre, Math.max(0.35, obstacle.trunkRadiusM * map.mmPerM), {
+				fill: { colour: c.clear }
+			});
+		} else {
+			pen.polygon('obstacles', [boxCorners(obstacle).map((p) => map.toPaper(p))], {
+				fill: { colour: c.obstacleTint },
+				stroke: mapStrokes.box
+			});
+		}
+	}
+}
+
+function boxCorners(box: Extract<Obstacle, { kind: 'box' }>): PlanPoint[] {
+	const a = (box.turnDeg * Math.PI) / 180;
+	return (
+		[
+			[-1, -1],
+			[1, -1],
+			[1, 1],
+			[-1, 1]
+		] as const
+	).map(([i, j]) => {
+		const [x, y] = [(i * box.sizeXM) / 2, (j * box.sizeYM) / 2];
+		return [box.eastM + x * Math.cos(a) + y * Math.sin(a), box.northM - x * Math.sin(a) + y * Math.cos(a)];
+	});
+}
+
+/** Reach circle and centre cross of each tracker; those of other sheets only thin and grey. */
+export function drawTrackers(pen: Pen, rows: PegRow[], own: Set<string>, map: MapFrame): void {
+	for (const row of rows) {
+		const mine = own.has(row.trackerId);
+		const [x, y] = map.toPaper([row.eastM, row.northM]);
+		pen.circle('reach', [x, y], row.reachM * map.mmPerM, {
+			stroke: mine ? mapStrokes.reach : mapStrokes.other
+		});
+		const arm = mine ? CROSS_ARM_MM : CROSS_ARM_MM * 0.7;
+		const stroke = mine ? mapStrokes.cross : mapStrokes.other;
+		pen.line('trackers', [x - arm, y], [x + arm, y], stroke);
+		pen.line('trackers', [x, y - arm], [x, y + arm], stroke);
+	}
+}
+
+export function drawTags(pen: Pen, tags: PlacedTag[]): void {
+	for (const tag of tags) {
+		if (tag.leaderTo) {
+			pen.line('tags', [tag.at[0], tag.at[1] - tag.capMm / 2], tag.leaderTo, {
+				colour: c.inkSoft,
+				widthMm: 0.15
+			});
+		}
+		pen.text('tags', tag.at, tag.text, {
+			capMm: tag.capMm,
+			weight: tag.optional ? 600 : 800,
+			anchor: 'middle',
+			colour: tag.optional ? c.inkSoft : c.ink
+		});
+	}
+}
+
+export function drawOrigin(pen: Pen, map: MapFrame): void {
+	const [x, y] = map.toPaper([0, 0]);
+	pen.circle('ground', [x, y], 1.1, { stroke: { colour: c.inkSoft, widthMm: 0.25 } });
+	pen.line('ground', [x - 2, y], [x + 2, y], { colour: c.inkSoft, widthMm: 0.2 });
+	pen.line('ground', [x, y - 2], [x, y + 2], { colour: c.inkSoft, widthMm: 0.2 });
+}
+
+/** Whether any part of an obstacle can show in an extent. */
+export function obstacleShows(obstacle: Obstacle, extent: Extent): boolean {
+	const r =
+		obstacle.kind === 'tree' ? obstacle.crownRadiusM : Math.hypot(obstacle.sizeXM, obstacle.sizeYM) / 2;
+	return (
+		obstacle.eastM + r > extent.minEastM &&
+		obstacle.eastM - r < extent.maxEastM &&
+		obstacle.northM + r > extent.minNorthM &&
+		obstacle.northM - r < extent.maxNorthM
+	);
+}
