@@ -1,0 +1,66 @@
+import { describe, expect, it } from 'vitest';
+import { trailSteps, type TrailFacts } from './trail-state';
+
+const fresh: TrailFacts = {
+	role: 'designer',
+	boundaryParts: 0,
+	trackers: 0,
+	findings: 0,
+	shade: null,
+	mounts: null,
+	winterRuleBrokenBy: null,
+	mountChosen: false,
+	plans: [],
+	layoutRevision: 1
+};
+const done = { status: 'done', outOfDate: false } as const;
+const states = (facts: Partial<TrailFacts>) => trailSteps({ ...fresh, ...facts }).map((step) => step.state);
+const step = (key: string, facts: Partial<TrailFacts>) =>
+	trailSteps({ ...fresh, ...facts }).find((each) => each.key === key);
+
+describe('the trail', () => {
+	it('starts with nothing done and says what comes first', () => {
+		expect(states({})).toEqual(['nothing', 'nothing', 'nothing', 'nothing', 'nothing', 'nothing']);
+		expect(step('plot', {})?.next).toContain('boundary');
+	});
+
+	it('ends with every step of the desk settled', () => {
+		const facts: Partial<TrailFacts> = {
+			boundaryParts: 1,
+			trackers: 18,
+			shade: done,
+			mounts: done,
+			winterRuleBrokenBy: 0,
+			mountChosen: true,
+			plans: [{ revision: 'A', layoutRevision: 1 }]
+		};
+		expect(states(facts).slice(0, 5)).toEqual(Array(5).fill('settled'));
+	});
+
+	it('counts open findings and trackers that break the winter rule', () => {
+		expect(step('trackers', { trackers: 4, findings: 2 })).toMatchObject({ state: 'open', count: 2 });
+		expect(step('shade', { shade: done, winterRuleBrokenBy: 1 })).toMatchObject({
+			state: 'open',
+			count: 1,
+			next: 'Winter rule broken by 1 tracker.'
+		});
+	});
+
+	it('opens a step again when the layout has changed since', () => {
+		expect(step('shade', { shade: { status: 'done', outOfDate: true } })?.state).toBe('open');
+		expect(
+			step('plan', { plans: [{ revision: 'B', layoutRevision: 1 }], layoutRevision: 2 })?.next
+		).toContain('since revision B');
+	});
+
+	it('shows running and failed work as such', () => {
+		expect(step('mounts', {})).toBeUndefined();
+		expect(step('sensors', { mounts: { status: 'working', outOfDate: false } })?.state).toBe('working');
+		expect(step('shade', { shade: { status: 'failed', outOfDate: false } })?.next).toContain('failed');
+	});
+
+	it('keeps plan and site out of reach of a client', () => {
+		const reachable = trailSteps({ ...fresh, role: 'client' }).filter((each) => each.reachable);
+		expect(reachable.map((each) => each.key)).toEqual(['plot', 'trackers', 'shade', 'sensors']);
+	});
+});
