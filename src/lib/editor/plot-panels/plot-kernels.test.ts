@@ -1,0 +1,158 @@
+import { describe, expect, it } from 'vitest';
+import { groundHeightM, type Ground, type Plot } from '$lib/core';
+import { emptyPlot } from '$lib/schema';
+import {
+	boundaryProblem,
+	insertCorner,
+	moveCorner,
+	partFromCorners,
+	removeCorner,
+	turnRings
+} from './boundary-edit';
+import { contoursOf, groundRange } from './contours';
+import { newBox, newTree, treeHeightIn } from './obstacle-edit';
+import { sunPath } from './sun-paths';
+
+function withSquare(): Plot {
+	return {
+		...emptyPlot(),
+		boundary: [
+			partFromCorners([
+				[0, 0],
+				[0, 10],
+				[10, 10],
+				[10, 0]
+			])
+		]
+	};
+}
+const first = { part: 0, ring: 0, index: 0 };
+
+describe('editing the boundary', () => {
+	it('turns a clockwise drawing round and rounds to the centimetre', () => {
+		const part = partFromCorners([
+			[0, 0],
+			[0, 10.004],
+			[10, 10]
+		]);
+		expect(part.outer).toEqual([
+			[10, 10],
+			[0, 10],
+			[0, 0]
+		]);
+	});
+
+	it('moves, inserts and removes corners', () => {
+		const plot = withSquare();
+		moveCorner(plot, first, [12.345, -1]);
+		expect(plot.boundary[0].outer[0]).toEqual([12.35, -1]);
+		expect(insertCorner(plot, first, [11, 5])).toEqual({ ...first, index: 1 });
+		expect(plot.boundary[0].outer).toHaveLength(5);
+		removeCorner(plot, { ...first, index: 1 });
+		removeCorner(plot, first);
+		expect(plot.boundary[0].outer).toHaveLength(3);
+		removeCorner(plot, first);
+		expect(plot.boundary).toEqual([]);
+	});
+
+	it('takes a hole away with its third corner and keeps the outline', () => {
+		const plot = withSquare();
+		plot.boundary[0].holes = [
+			[
+				[2, 2],
+				[2, 4],
+				[4, 4]
+			]
+		];
+		removeCorner(plot, { part: 0, ring: 1, index: 2 });
+		expect(plot.boundary[0].holes).toEqual([]);
+		expect(plot.boundary[0].outer).toHaveLength(4);
+	});
+
+	it('says why a boundary cannot be and turns rings that were dragged over', () => {
+		const plot = withSquare();
+		expect(boundaryProblem(plot.boundary)).toBeNull();
+		const crossed = withSquare();
+		moveCorner(crossed, first, [-5, 5]);
+		expect(boundaryProblem(crossed.boundary)).toMatch(/Outline crosses itself/);
+		plot.boundary[0].holes = [
+			[
+				[20, 2],
+				[20, 4],
+				[24, 4]
+			]
+		];
+		expect(boundaryProblem(plot.boundary)).toMatch(/hole 1 does not lie inside/);
+		plot.boundary[0].outer.reverse();
+		turnRings(plot);
+		expect(plot.boundary[0].outer).toEqual(withSquare().boundary[0].outer);
+	});
+});
+
+describe('the ground on the plan', () => {
+	const ground: Ground = { kind: 'plane', heightM: 3, risePercent: 9, riseTowardsDeg: 90 };
+
+	it('has contours on their own height, at a round step', () => {
+		const { stepM, lines } = contoursOf(ground, { westM: -60, eastM: 60, southM: -40, northM: 40 });
+		// 120 m at 9 % is 10.8 m of height.
+		expect(stepM).toBe(1);
+		expect(lines.length).toBeGreaterThanOrEqual(10);
+		for (const { heightM, from, to } of lines) {
+			expect(groundHeightM(ground, from[0], from[1])).toBeCloseTo(heightM, 9);
+			expect(groundHeightM(ground, to[0], to[1])).toBeCloseTo(heightM, 9);
+		}
+		expect(
+			contoursOf({ kind: 'level', heightM: 0 }, { westM: 0, eastM: 9, southM: 0, northM: 9 }).lines
+		).toEqual([]);
+	});
+
+	it('tells lowest and highest', () => {
+		expect(
+			groundRange(ground, [
+				[-60, 0],
+				[60, 5]
+			])
+		).toEqual({
+			lowestM: expect.closeTo(-2.4, 9) as number,
+			highestM: expect.closeTo(8.4, 9) as number
+		});
+		expect(groundRange(ground, [])).toBeNull();
+	});
+});
+
+describe('obstacles', () => {
+	it('get names that are free', () => {
+		const one = newTree('a', [0, 0], []);
+		expect(newTree('b', [1, 1], [one]).name).toBe('Tree 2');
+		expect(newBox('c', [1, 1], [one]).name).toBe('Building 1');
+	});
+
+	it('grow until they are full-grown', () => {
+		const tree = { ...newTree('a', [0, 0], []), heightM: 9, growthMPerYear: 0.4, maxHeightM: 14 };
+		expect(treeHeightIn(tree, 10)).toBeCloseTo(13, 9);
+		expect(treeHeightIn(tree, 30)).toBe(14);
+	});
+});
+
+describe('the sun behind the skyline', () => {
+	const place = {
+		latitudeDeg: 0,
+		longitudeDeg: 0,
+		altitudeM: 0,
+		timeZone: 'UTC',
+		magneticDeclinationDeg: 0
+	};
+
+	it('is lost for about 20 minutes at each end of an equinox day at the equator behind 5 degrees', () => {
+		// The sun climbs upright at 15 degrees an hour there: 5 degrees take 20 minutes, less what refraction gives back.
+		const path = sunPath('2026-03-20', place, 0, [
+			{ azimuthDeg: 0, elevationDeg: 5 },
+			{ azimuthDeg: 180, elevationDeg: 5 }
+		]);
+		expect(path.upMinutes).toBeGreaterThan(720);
+		expect(path.upMinutes).toBeLessThan(730);
+		expect(path.lostMinutes).toBeGreaterThanOrEqual(40);
+		expect(path.lostMinutes).toBeLessThanOrEqual(46);
+		expect(sunPath('2026-03-20', place, 0, []).lostMinutes).toBe(0);
+	});
+});
