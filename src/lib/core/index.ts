@@ -16,3 +16,5 @@ export * from './layout/tags';
 export * from './layout/fill-plot';
 export * from './layout/check-layout';
 export * from './layout/ground-cover';
+export * from './field';
+export * from './scene';

@@ -1,0 +1,175 @@
+import type { SunDirection } from './conventions';
+import type { Layout, Place, Plot, Posture, TrackerModel } from './document';
+import { groundHeightM } from './geometry/ground';
+import { prepareSkyline, sunHidden, type PreparedSkyline } from './geometry/skyline';
+import { aimOf } from './machine/aim';
+import { centreOffset } from './machine/pose';
+import { ShadeEngine, type TableGroup } from './shade/engine';
+import { obstacleSolids } from './shade/solid';
+
+/** A layout on its plot, ready to be asked for shade again and again. Make it once and reuse it between calls. */
+export interface Field {
+	readonly place: Place;
+	readonly plot: Plot;
+	readonly layout: Layout;
+	readonly treeYears: number;
+	readonly skyline: PreparedSkyline;
+	/** Model of each tracker, in layout order. */
+	readonly models: readonly TrackerModel[];
+	readonly engine: ShadeEngine;
+}
+
+export interface FieldInput {
+	place: Place;
+	plot: Plot;
+	layout: Layout;
+	/** Years that the trees have grown since the plot was recorded. */
+	treeYears?: number;
+}
+
+/** What throws and takes the shade: glass takes it, glass and frame margin throw it; the slot in the middle is clear. */
+export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
+	const sun: SunDirection = { azimuthDeg: 0, elevationDeg: 0 };
+	return {
+		halfWidth: model.widthM / 2,
+		halfHeight: model.heightM / 2,
+		steelHalfWidth: model.widthM / 2 + model.frameMarginM,
+		steelHalfHeight: model.heightM / 2 + model.frameMarginM,
+		halfGap: Math.max(0, Math.min(model.centreGapM, model.widthM)) / 2,
+		poseAt(azimuthDeg, elevationDeg) {
+			sun.azimuthDeg = azimuthDeg;
+			sun.elevationDeg = elevationDeg;
+			const aim = aimOf(model, posture, sun);
+			return { ...aim, offset: centreOffset(model, aim) };
+		}
+	};
+}
+
+const postureKey = (posture: Posture): string =>
+	posture.kind === 'standing' ? `standing ${posture.azimuthDeg} ${posture.tiltDeg}` : posture.kind;
+
+/**
+ * Prepares a field. Trees and boxes stand on the ground under their middle. Throws only when a tracker names a model
+ * that the layout does not hold, which is a programmer's mistake: layouts are checked where they come in.
+ */
+export function prepareField(input: FieldInput): Field {
+	const { place, plot, layout } = input;
+	const treeYears = input.treeYears ?? 0;
+	const byId = new Map(layout.models.map((model) => [model.id, model]));
+	const count = layout.trackers.length;
+	const east = new Float64Array(count);
+	const north = new Float64Array(count);
+	const up = new Float64Array(count);
+	const groupOf = new Int32Array(count);
+	const groups: TableGroup[] = [];
+	const groupIndex = new Map<string, number>();
+	const models: TrackerModel[] = [];
+	layout.trackers.forEach((tracker, i) => {
+		const model = byId.get(tracker.modelId);
+		if (!model)
+			throw new Error(`Tracker ${tracker.tag} uses the model ${tracker.modelId}, which is not in its layout`);
+		models.push(model);
+		east[i] = tracker.eastM;
+		north[i] = tracker.northM;
+		up[i] =
+			groundHeightM(plot.ground, tracker.eastM, tracker.northM) + (tracker.axisHeightM ?? model.axisHeightM);
+		const key = `${model.id}\n${postureKey(tracker.posture)}`;
+		let group = groupIndex.get(key);
+		if (group === undefined) {
+			group = groups.length;
+			groupIndex.set(key, group);
+			groups.push(tableGroup(model, tracker.posture));
+		}
+		groupOf[i] = group;
+	});
+	const solids = plot.obstacles.flatMap((obstacle, k) =>
+		obstacleSolids(obstacle, groundHeightM(plot.ground, obstacle.eastM, obstacle.northM), treeYears, k)
+	);
+	return {
+		place,
+		plot,
+		layout,
+		treeYears,
+		skyline: prepareSkyline(plot.skyline),
+		models,
+		engine: new ShadeEngine(east, north, up, groupOf, groups, solids)
+	};
+}
+
+/** The same field with one tracker elsewhere; metres. Much cheaper than preparing it again, and leaves `field` as it is. */
+export function moveTracker(field: Field, index: number, eastM: number, northM: number): Field {
+	const { engine, plot, layout, models } = field;
+	const east = engine.east.slice();
+	const north = engine.north.slice();
+	const up = engine.up.slice();
+	const tracker = { ...layout.trackers[index], eastM, northM };
+	east[index] = eastM;
+	north[index] = northM;
+	up[index] = groundHeightM(plot.ground, eastM, northM) + (tracker.axisHeightM ?? models[index].axisHeightM);
+	const trackers = layout.trackers.slice();
+	trackers[index] = tracker;
+	return {
+		...field,
+		layout: { ...layout, trackers },
+		engine: new ShadeEngine(east, north, up, engine.groupOf, engine.groups, engine.solids)
+	};
+}
+
+/** True when the skyline or the horizon hides this apparent sun from the plot. */
+export function fieldSunHidden(field: Field, sun: SunDirection): boolean {
+	return sunHidden(field.skyline, sun.azimuthDeg, sun.elevationDeg);
+}
+
+/**
+ * Shaded share of every table under one apparent sun, 0..1 in layout order; 1 where the front is not lit and
+ * everywhere while the skyline or the horizon hides the sun. Exact (areas of polygons).
+ */
+export function fieldShade(field: Field, sun: SunDirection): Float64Array {
+	const { engine } = field;
+	const shares = new Float64Array(engine.count);
+	if (fieldSunHidden(field, sun)) return shares.fill(1);
+	engine.setSun(sun.azimuthDeg, sun.elevationDeg);
+	for (let i = 0; i < engine.count; i++) shares[i] = engine.share(i);
+	return shares;
+}
+
+/** Light that a crown must let through for the glass under it to be drawn as lit, and a sensor to count as lit. */
+export const LIT_UNDER_CROWN = 0.5;
+
+/**
+ * The lit part of every table, for drawing: [tracker][piece] is a flat convex polygon [x0, y0, x1, y1, ..] in table
+ * coordinates, x to the right seen facing the glass, y up the slope, metres from the middle. Glass under a crown
+ * counts as lit when at least half of the beam passes.
+ */
+export function fieldLitPieces(field: Field, sun: SunDirection): number[][][] {
+	const { engine } = field;
+	if (fieldSunHidden(field, sun)) return Array.from({ length: engine.count }, () => []);
+	engine.setSun(sun.azimuthDeg, sun.elevationDeg);
+	return Array.from({ length: engine.count }, (_, i) => engine.litPolygons(i, LIT_UNDER_CROWN));
+}
+
+export interface TrackerPose {
+	/** Middle of the glass, local frame, metres. */
+	centre: [number, number, number];
+	azimuthDeg: number;
+	tiltDeg: number;
+	/** Glass, metres. */
+	widthM: number;
+	heightM: number;
+}
+
+/** Where every table stands and points under one apparent sun, in layout order; at night they rest at night. */
+export function trackerPoses(field: Field, sun: SunDirection): TrackerPose[] {
+	const { engine, models } = field;
+	engine.setSun(sun.azimuthDeg, sun.elevationDeg, false);
+	return models.map((model, i) => {
+		const pose = engine.poses[engine.groupOf[i]];
+		return {
+			centre: engine.centre(i),
+			azimuthDeg: pose.azimuthDeg,
+			tiltDeg: pose.tiltDeg,
+			widthM: model.widthM,
+			heightM: model.heightM
+		};
+	});
+}

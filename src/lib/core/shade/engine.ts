@@ -1,0 +1,547 @@
+import { RADIANS_PER_DEGREE, tableAxes } from '../conventions';
+import { hullOrder } from './hull';
+import { LitPieces, flatArea } from './pieces';
+import { RectUnion } from './rect-union';
+import type { Solid } from './solid';
+import { ViewGrid } from './view-grid';
+
+/** Tables that share sizes and, at any one moment, their pose. */
+export interface TableGroup {
+	/** Half of the glass, metres. */
+	halfWidth: number;
+	halfHeight: number;
+	/** Half of the steel outline, which is what throws the shadow, metres. */
+	steelHalfWidth: number;
+	steelHalfHeight: number;
+	/** Half of the clear slot in the middle; 0 is none. */
+	halfGap: number;
+	/** Pose at a sun: bearing, tilt and the way from the fixed point of a table to its middle. */
+	poseAt(
+		azimuthDeg: number,
+		elevationDeg: number
+	): { azimuthDeg: number; tiltDeg: number; offset: readonly [number, number, number] };
+}
+
+/** A table counts as turned away from the sun below this cosine. */
+const LEAST_COSINE = 1e-6;
+/** Shaders must stand this far up-sun, metres along the target's normal. */
+const UP_SUN_M = 1e-7;
+const LEAST_SHADOW_M2 = 1e-13;
+const MOST_SHADOW_CORNERS = 256;
+
+/** Where one group's tables point at the present sun. */
+class GroupPose {
+	azimuthDeg = 0;
+	tiltDeg = 0;
+	offset: readonly [number, number, number] = [0, 0, 0];
+	u: readonly number[] = [1, 0, 0];
+	v: readonly number[] = [0, 1, 0];
+	n: readonly number[] = [0, 0, 1];
+	/** n.s */
+	cosine = 1;
+	// Projections along the sun on the table's plane: U, V give table coordinates, D the distance up-sun.
+	ux = 0;
+	uy = 0;
+	uz = 0;
+	vx = 0;
+	vy = 0;
+	vz = 0;
+	/** Offset and half extents in the sun's view. */
+	viewX = 0;
+	viewY = 0;
+	extentX = 0;
+	extentY = 0;
+}
+
+/**
+ * Exact shade of a set of tables and solids under one sun at a time.
+ *
+ * Who can shade whom is found in the sun's view: the plane square to the sun. One thing can shade another only where
+ * their outlines overlap in that view, whatever the poses, so each table's outline box goes into a flat grid and only
+ * boxes that overlap are looked at. This needs memory in proportion to the number of tables and is safe when stops
+ * clamp a pose. Pairs of one pose are axis-aligned rectangles (exact union); everything else is subtracted from the
+ * target's lit pieces.
+ */
+export class ShadeEngine {
+	readonly count: number;
+	readonly poses: GroupPose[];
+	private readonly viewX: Float64Array;
+	private readonly viewY: Float64Array;
+	private readonly grid = new ViewGrid();
+	private readonly rects = new RectUnion();
+	private readonly pieces = new LitPieces();
+	private readonly shadow = new Float64Array(2 * MOST_SHADOW_CORNERS);
+	private readonly corners = new Float64Array(3 * MOST_SHADOW_CORNERS);
+	private readonly hullX = new Float64Array(MOST_SHADOW_CORNERS);
+	private readonly hullY = new Float64Array(MOST_SHADOW_CORNERS);
+	private readonly hullIndex = new Int32Array(2 * MOST_SHADOW_CORNERS);
+	private near = new Int32Array(64);
+	private nearCount = 0;
+	private readonly nearSolids: Int32Array;
+	private nearSolidCount = 0;
+	readonly solids: readonly Solid[];
+	/** West, east, low, high of each solid in the sun's view. */
+	private readonly solidBoxes: Float64Array;
+	private readonly outlines: (Int32Array | null)[];
+	/** Views of all solids together. */
+	private solidsWest = 0;
+	private solidsEast = 0;
+	private solidsLow = 0;
+	private solidsHigh = 0;
+	private s: [number, number, number] = [0, 0, 1];
+	private axisX: [number, number, number] = [1, 0, 0];
+	private axisY: [number, number, number] = [0, 1, 0];
+
+	constructor(
+		/** Fixed points of the tables, metres. */
+		readonly east: Float64Array,
+		readonly north: Float64Array,
+		readonly up: Float64Array,
+		/** Group of each table. */
+		readonly groupOf: Int32Array,
+		readonly groups: readonly TableGroup[],
+		solids: readonly Solid[]
+	) {
+		this.count = east.length;
+		this.poses = groups.map(() => new GroupPose());
+		this.viewX = new Float64Array(this.count);
+		this.viewY = new Float64Array(this.count);
+		// Opaque ones first: what they take need not be cut again by a crown.
+		this.solids = [...solids].sort((a, b) => a.passes - b.passes);
+		this.solidBoxes = new Float64Array(4 * solids.length);
+		this.outlines = solids.map(() => null);
+		this.nearSolids = new Int32Array(solids.length);
+	}
+
+	/**
+	 * Turns everything to a sun. With `indexed` false no grid is built and each question walks all tables: cheaper
+	 * when only a few tables are asked about.
+	 */
+	setSun(azimuthDeg: number, elevationDeg: number, indexed = true): void {
+		const a = azimuthDeg * RADIANS_PER_DEGREE;
+		const e = elevationDeg * RADIANS_PER_DEGREE;
+		const sa = Math.sin(a);
+		const ca = Math.cos(a);
+		const se = Math.sin(e);
+		const ce = Math.cos(e);
+		const s = (this.s = [sa * ce, ca * ce, se]);
+		const ax = (this.axisX = [-ca, sa, 0]);
+		const ay = (this.axisY = [-sa * se, -ca * se, ce]);
+		let widest = 0;
+		let highest = 0;
+		for (let g = 0; g < this.groups.length; g++) {
+			const group = this.groups[g];
+			const pose = this.poses[g];
+			const aim = group.poseAt(azimuthDeg, elevationDeg);
+			pose.azimuthDeg = aim.azimuthDeg;
+			pose.tiltDeg = aim.tiltDeg;
+			pose.offset = aim.offset;
+			const { u, v, n } = tableAxes(aim.azimuthDeg, aim.tiltDeg);
+			pose.u = u;
+			pose.v = v;
+			pose.n = n;
+			const cosine = dot(n, s);
+			pose.cosine = cosine;
+			if (Math.abs(cosine) > LEAST_COSINE) {
+				const us = dot(u, s) / cosine;
+				const vs = dot(v, s) / cosine;
+				pose.ux = u[0] - us * n[0];
+				pose.uy = u[1] - us * n[1];
+				pose.uz = u[2] - us * n[2];
+				pose.vx = v[0] - vs * n[0];
+				pose.vy = v[1] - vs * n[1];
+				pose.vz = v[2] - vs * n[2];
+			}
+			pose.viewX = dot(aim.offset, ax);
+			pose.viewY = dot(aim.offset, ay);
+			pose.extentX =
+				group.steelHalfWidth * Math.abs(dot(u, ax)) + group.steelHalfHeight * Math.abs(dot(v, ax));
+			pose.extentY =
+				group.steelHalfWidth * Math.abs(dot(u, ay)) + group.steelHalfHeight * Math.abs(dot(v, ay));
+			if (pose.extentX > widest) widest = pose.extentX;
+			if (pose.extentY > highest) highest = pose.extentY;
+		}
+		const { east, north, up, viewX, viewY, groupOf, poses } = this;
+		for (let i = 0; i < this.count; i++) {
+			const pose = poses[groupOf[i]];
+			viewX[i] = east[i] * ax[0] + north[i] * ax[1] + pose.viewX;
+			viewY[i] = east[i] * ay[0] + north[i] * ay[1] + up[i] * ay[2] + pose.viewY;
+		}
+		this.setSolids();
+		if (indexed) this.grid.build(viewX, viewY, this.count, 2 * widest, 2 * highest);
+		else this.grid.leave(this.count);
+	}
+
+	private setSolids(): void {
+		const { axisX: ax, axisY: ay, solidBoxes: boxes } = this;
+		this.solidsWest = this.solidsLow = Infinity;
+		this.solidsEast = this.solidsHigh = -Infinity;
+		for (let k = 0; k < this.solids.length; k++) {
+			const { vertices } = this.solids[k];
+			let west = Infinity;
+			let east = -Infinity;
+			let low = Infinity;
+			let high = -Infinity;
+			for (let o = 0; o < vertices.length; o += 3) {
+				const x = vertices[o] * ax[0] + vertices[o + 1] * ax[1];
+				const y = vertices[o] * ay[0] + vertices[o + 1] * ay[1] + vertices[o + 2] * ay[2];
+				if (x < west) west = x;
+				if (x > east) east = x;
+				if (y < low) low = y;
+				if (y > high) high = y;
+			}
+			boxes[4 * k] = west;
+			boxes[4 * k + 1] = east;
+			boxes[4 * k + 2] = low;
+			boxes[4 * k + 3] = high;
+			this.outlines[k] = null;
+			this.solidsWest = Math.min(this.solidsWest, west);
+			this.solidsEast = Math.max(this.solidsEast, east);
+			this.solidsLow = Math.min(this.solidsLow, low);
+			this.solidsHigh = Math.max(this.solidsHigh, high);
+		}
+	}
+
+	/** Cosine of the sun's angle to a table's front. */
+	cosine(i: number): number {
+		return this.poses[this.groupOf[i]].cosine;
+	}
+
+	/** Middle of a table's glass, local frame, metres. */
+	centre(i: number): [number, number, number] {
+		const { offset } = this.poses[this.groupOf[i]];
+		return [this.east[i] + offset[0], this.north[i] + offset[1], this.up[i] + offset[2]];
+	}
+
+	/** Finds what may shade table i, or a head up to `growM` outside it; returns how many tables and solids. */
+	collect(i: number, growM = 0): number {
+		const pose = this.poses[this.groupOf[i]];
+		const { viewX, viewY, groupOf, poses, groups, grid } = this;
+		const x = viewX[i];
+		const y = viewY[i];
+		const ex = pose.extentX + growM;
+		const ey = pose.extentY + growM;
+		const n = pose.n;
+		// With the back to the sun up-sun is on the other side of the plane.
+		const sign = pose.cosine < 0 ? -1 : 1;
+		const cx = this.east[i] + pose.offset[0];
+		const cy = this.north[i] + pose.offset[1];
+		const cz = this.up[i] + pose.offset[2];
+		this.nearCount = 0;
+		const rows = grid.ask(x, y, ex, ey);
+		for (let r = 0; r < rows; r++) {
+			for (let k = grid.from[r]; k < grid.to[r]; k++) {
+				const j = grid.order[k];
+				const g = groupOf[j];
+				const other = poses[g];
+				const dx = viewX[j] - x;
+				if (dx >= ex + other.extentX || -dx >= ex + other.extentX) continue;
+				const dy = viewY[j] - y;
+				if (dy >= ey + other.extentY || -dy >= ey + other.extentY) continue;
+				if (j === i) continue;
+				const o = other.offset;
+				const ahead =
+					n[0] * (this.east[j] + o[0] - cx) +
+					n[1] * (this.north[j] + o[1] - cy) +
+					n[2] * (this.up[j] + o[2] - cz);
+				const group = groups[g];
+				const lean =
+					other === pose
+						? 0
+						: group.steelHalfWidth * Math.abs(dot(n, other.u)) +
+							group.steelHalfHeight * Math.abs(dot(n, other.v));
+				if (sign * ahead + lean + growM <= UP_SUN_M) continue;
+				if (this.nearCount === this.near.length) {
+					const larger = new Int32Array(2 * this.near.length);
+					larger.set(this.near);
+					this.near = larger;
+				}
+				this.near[this.nearCount++] = j;
+			}
+		}
+		this.nearSolidCount = 0;
+		if (
+			this.solids.length > 0 &&
+			x - ex < this.solidsEast &&
+			x + ex > this.solidsWest &&
+			y - ey < this.solidsHigh &&
+			y + ey > this.solidsLow
+		) {
+			const boxes = this.solidBoxes;
+			for (let k = 0; k < this.solids.length; k++) {
+				if (x + ex <= boxes[4 * k] || x - ex >= boxes[4 * k + 1]) continue;
+				if (y + ey <= boxes[4 * k + 2] || y - ey >= boxes[4 * k + 3]) continue;
+				this.nearSolids[this.nearSolidCount++] = k;
+			}
+		}
+		return this.nearCount + this.nearSolidCount;
+	}
+
+	/** Shaded share of table i, 0..1; 1 when its front is not lit. */
+	share(i: number): number {
+		if (this.cosine(i) <= LEAST_COSINE) return 1;
+		return this.collect(i) === 0 ? 0 : this.shareOfCollected(i);
+	}
+
+	/** Shaded share from what `collect` found for the same table. */
+	shareOfCollected(i: number): number {
+		const g = this.groupOf[i];
+		const pose = this.poses[g];
+		if (pose.cosine <= LEAST_COSINE) return 1;
+		if (this.nearCount + this.nearSolidCount === 0) return 0;
+		const group = this.groups[g];
+		const area = 4 * (group.halfWidth - group.halfGap) * group.halfHeight;
+		if (!(area > 0)) return 0;
+		let alike = this.nearSolidCount === 0;
+		for (let k = 0; alike && k < this.nearCount; k++) {
+			const other = this.poses[this.groupOf[this.near[k]]];
+			alike = other.azimuthDeg === pose.azimuthDeg && other.tiltDeg === pose.tiltDeg;
+		}
+		if (alike) return Math.min(1, this.alikeArea(i) / area);
+		this.cutPieces(i);
+		return Math.min(1, Math.max(0, 1 - this.pieces.litArea() / area));
+	}
+
+	/** Flat polygons of the lit pieces of table i in table coordinates, metres. */
+	litPolygons(i: number, leastLight: number): number[][] {
+		if (this.cosine(i) <= LEAST_COSINE) return [];
+		this.collect(i);
+		this.cutPieces(i);
+		return this.pieces.polygons(leastLight);
+	}
+
+	/** Shadows of tables in the target's own pose are rectangles along its axes. */
+	private alikeArea(i: number): number {
+		const { rects, groupOf, groups, poses } = this;
+		const pose = poses[groupOf[i]];
+		const target = groups[groupOf[i]];
+		let area = 0;
+		const parts = target.halfGap > 0 ? 2 : 1;
+		const h = target.halfHeight;
+		for (let part = 0; part < parts; part++) {
+			const x0 = parts === 2 && part === 1 ? target.halfGap : -target.halfWidth;
+			const x1 = parts === 2 && part === 0 ? -target.halfGap : target.halfWidth;
+			rects.clear();
+			for (let k = 0; k < this.nearCount; k++) {
+				const j = this.near[k];
+				const other = poses[groupOf[j]];
+				const shader = groups[groupOf[j]];
+				const dx = this.east[j] + other.offset[0] - this.east[i] - pose.offset[0];
+				const dy = this.north[j] + other.offset[1] - this.north[i] - pose.offset[1];
+				const dz = this.up[j] + other.offset[2] - this.up[i] - pose.offset[2];
+				const sx = pose.ux * dx + pose.uy * dy + pose.uz * dz;
+				const sy = pose.vx * dx + pose.vy * dy + pose.vz * dz;
+				const y0 = Math.max(-h, sy - shader.steelHalfHeight);
+				const y1 = Math.min(h, sy + shader.steelHalfHeight);
+				const w = shader.steelHalfWidth;
+				if (shader.halfGap > 0) {
+					rects.add(Math.max(x0, sx - w), Math.min(x1, sx - shader.halfGap), y0, y1);
+					rects.add(Math.max(x0, sx + shader.halfGap), Math.min(x1, sx + w), y0, y1);
+				} else {
+					rects.add(Math.max(x0, sx - w), Math.min(x1, sx + w), y0, y1);
+				}
+			}
+			area += rects.area();
+		}
+		return area;
+	}
+
+	private cutPieces(i: number): void {
+		const { pieces, shadow } = this;
+		const { halfWidth: w, halfHeight: h, halfGap } = this.groups[this.groupOf[i]];
+		pieces.clear();
+		if (halfGap > 0) {
+			pieces.addRect(-w, -halfGap, -h, h);
+			pieces.addRect(halfGap, w, -h, h);
+		} else {
+			pieces.addRect(-w, w, -h, h);
+		}
+		for (let k = 0; k < this.nearCount && pieces.count > 0; k++) {
+			const parts = this.tableParts(this.near[k]);
+			for (let part = 0; part < parts; part++) {
+				const m = this.tableShadow(i, this.near[k], part, 0);
+				if (m > 0) pieces.subtract(shadow, m, 0);
+			}
+		}
+		for (let k = 0; k < this.nearSolidCount && pieces.count > 0; k++) {
+			const m = this.solidShadow(i, this.nearSolids[k], 0);
+			if (m > 0) pieces.subtract(shadow, m, this.solids[this.nearSolids[k]].passes);
+		}
+	}
+
+	private tableParts(j: number): number {
+		return this.groups[this.groupOf[j]].halfGap > 0 ? 2 : 1;
+	}
+
+	/**
+	 * Calls back with every shadow of the things found by `collect` on the plane `forwardM` in front of table i:
+	 * polygon in table coordinates, counter-clockwise, its corners, the share of light that passes, and the table
+	 * (0..) or the obstacle (-1 - source) that throws it.
+	 */
+	shadowsAhead(
+		i: number,
+		forwardM: number,
+		visit: (shadow: Float64Array, corners: number, passes: number, by: number) => void
+	): void {
+		for (let k = 0; k < this.nearCount; k++) {
+			const parts = this.tableParts(this.near[k]);
+			for (let part = 0; part < parts; part++) {
+				const m = this.tableShadow(i, this.near[k], part, forwardM);
+				if (m > 0) visit(this.shadow, m, 0, this.near[k]);
+			}
+		}
+		for (let k = 0; k < this.nearSolidCount; k++) {
+			const solid = this.solids[this.nearSolids[k]];
+			const m = this.solidShadow(i, this.nearSolids[k], forwardM);
+			if (m > 0) visit(this.shadow, m, solid.passes, -1 - solid.source);
+		}
+	}
+
+	/** Shadow of half `part` of table j on the plane `forwardM` ahead of table i, into `shadow`; its corners or 0. */
+	private tableShadow(i: number, j: number, part: number, forwardM: number): number {
+		const { groupOf, groups, poses, corners } = this;
+		const pose = poses[groupOf[i]];
+		const other = poses[groupOf[j]];
+		const shader = groups[groupOf[j]];
+		const { n, cosine } = pose;
+		const dx = this.east[j] + other.offset[0] - this.east[i] - pose.offset[0] - forwardM * n[0];
+		const dy = this.north[j] + other.offset[1] - this.north[i] - pose.offset[1] - forwardM * n[1];
+		const dz = this.up[j] + other.offset[2] - this.up[i] - pose.offset[2] - forwardM * n[2];
+		const w = shader.steelHalfWidth;
+		const h = shader.steelHalfHeight;
+		const x0 = shader.halfGap > 0 && part === 1 ? shader.halfGap : -w;
+		const x1 = shader.halfGap > 0 && part === 0 ? -shader.halfGap : w;
+		const cx = pose.ux * dx + pose.uy * dy + pose.uz * dz;
+		const cy = pose.vx * dx + pose.vy * dy + pose.vz * dz;
+		const cd = (n[0] * dx + n[1] * dy + n[2] * dz) / cosine;
+		const { u, v } = other;
+		const uX = pose.ux * u[0] + pose.uy * u[1] + pose.uz * u[2];
+		const uY = pose.vx * u[0] + pose.vy * u[1] + pose.vz * u[2];
+		const uD = dot(n, u) / cosine;
+		const vX = pose.ux * v[0] + pose.uy * v[1] + pose.uz * v[2];
+		const vY = pose.vx * v[0] + pose.vy * v[1] + pose.vz * v[2];
+		const vD = dot(n, v) / cosine;
+		for (let k = 0; k < 4; k++) {
+			const a = k === 0 || k === 3 ? x0 : x1;
+			const b = k < 2 ? -h : h;
+			corners[3 * k] = cx + a * uX + b * vX;
+			corners[3 * k + 1] = cy + a * uY + b * vY;
+			corners[3 * k + 2] = cd + a * uD + b * vD;
+		}
+		return this.clipUpSun(4);
+	}
+
+	/** Keeps the part of the flat-ordered `corners` (x, y, distance up-sun) that stands up-sun; counter-clockwise. */
+	private clipUpSun(m: number): number {
+		const { corners, shadow } = this;
+		let size = 0;
+		for (let k = 0; k < m; k++) {
+			const o = 3 * k;
+			const q = k + 1 === m ? 0 : o + 3;
+			const d = corners[o + 2] - UP_SUN_M;
+			const e = corners[q + 2] - UP_SUN_M;
+			if (d > 0) {
+				shadow[2 * size] = corners[o];
+				shadow[2 * size++ + 1] = corners[o + 1];
+			}
+			if (d > 0 !== e > 0) {
+				const t = d / (d - e);
+				shadow[2 * size] = corners[o] + (corners[q] - corners[o]) * t;
+				shadow[2 * size++ + 1] = corners[o + 1] + (corners[q + 1] - corners[o + 1]) * t;
+			}
+		}
+		if (size < 3) return 0;
+		const area = flatArea(shadow, 0, size);
+		if (Math.abs(area) < LEAST_SHADOW_M2) return 0;
+		if (area < 0) this.reverse(size);
+		return size;
+	}
+
+	private reverse(m: number): void {
+		const { shadow } = this;
+		for (let a = 0, b = m - 1; a < b; a++, b--) {
+			for (let c = 0; c < 2; c++) {
+				const keep = shadow[2 * a + c];
+				shadow[2 * a + c] = shadow[2 * b + c];
+				shadow[2 * b + c] = keep;
+			}
+		}
+	}
+
+	/** Shadow of solid k on the plane ahead of table i, into `shadow`; its corners or 0. */
+	private solidShadow(i: number, k: number, forwardM: number): number {
+		const { solids, corners, shadow } = this;
+		const pose = this.poses[this.groupOf[i]];
+		const { vertices, edges } = solids[k];
+		const { n, cosine } = pose;
+		const cx = this.east[i] + pose.offset[0] + forwardM * n[0];
+		const cy = this.north[i] + pose.offset[1] + forwardM * n[1];
+		const cz = this.up[i] + pose.offset[2] + forwardM * n[2];
+		const count = vertices.length / 3;
+		let ahead = 0;
+		for (let o = 0; o < vertices.length; o += 3) {
+			const dx = vertices[o] - cx;
+			const dy = vertices[o + 1] - cy;
+			const dz = vertices[o + 2] - cz;
+			corners[o] = pose.ux * dx + pose.uy * dy + pose.uz * dz;
+			corners[o + 1] = pose.vx * dx + pose.vy * dy + pose.vz * dz;
+			const d = (n[0] * dx + n[1] * dy + n[2] * dz) / cosine;
+			corners[o + 2] = d;
+			if (d > UP_SUN_M) ahead++;
+		}
+		if (ahead === 0) return 0;
+		if (ahead === count) {
+			// Its outline in the sun's view is the same whichever table it falls on.
+			const outline = this.outlineOf(k);
+			for (let c = 0; c < outline.length; c++) {
+				shadow[2 * c] = corners[3 * outline[c]];
+				shadow[2 * c + 1] = corners[3 * outline[c] + 1];
+			}
+			const area = flatArea(shadow, 0, outline.length);
+			if (Math.abs(area) < LEAST_SHADOW_M2) return 0;
+			if (area < 0) this.reverse(outline.length);
+			return outline.length;
+		}
+		const { hullX, hullY, hullIndex } = this;
+		let size = 0;
+		for (let o = 0; o < 3 * count; o += 3) {
+			if (corners[o + 2] <= UP_SUN_M) continue;
+			hullX[size] = corners[o];
+			hullY[size++] = corners[o + 1];
+		}
+		for (let e = 0; e < edges.length; e += 2) {
+			const p = 3 * edges[e];
+			const q = 3 * edges[e + 1];
+			const d = corners[p + 2] - UP_SUN_M;
+			const f = corners[q + 2] - UP_SUN_M;
+			if (d > 0 === f > 0) continue;
+			const t = d / (d - f);
+			hullX[size] = corners[p] + (corners[q] - corners[p]) * t;
+			hullY[size++] = corners[p + 1] + (corners[q + 1] - corners[p + 1]) * t;
+		}
+		const m = hullOrder(hullX, hullY, size, hullIndex);
+		for (let c = 0; c < m; c++) {
+			shadow[2 * c] = hullX[hullIndex[c]];
+			shadow[2 * c + 1] = hullY[hullIndex[c]];
+		}
+		return m < 3 || flatArea(shadow, 0, m) < LEAST_SHADOW_M2 ? 0 : m;
+	}
+
+	private outlineOf(k: number): Int32Array {
+		const known = this.outlines[k];
+		if (known) return known;
+		const { axisX: ax, axisY: ay, hullX, hullY, hullIndex } = this;
+		const { vertices } = this.solids[k];
+		for (let o = 0, c = 0; o < vertices.length; o += 3, c++) {
+			hullX[c] = vertices[o] * ax[0] + vertices[o + 1] * ax[1];
+			hullY[c] = vertices[o] * ay[0] + vertices[o + 1] * ay[1] + vertices[o + 2] * ay[2];
+		}
+		const outline = hullIndex.slice(0, hullOrder(hullX, hullY, vertices.length / 3, hullIndex));
+		this.outlines[k] = outline;
+		return outline;
+	}
+}
+
+function dot(a: readonly number[], b: readonly number[]): number {
+	return a[0] * b[0] + a[1] * b[1] + a[2] * b[2];
+}
