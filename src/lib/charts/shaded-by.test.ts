@@ -1,0 +1,56 @@
+import { describe, expect, it } from 'vitest';
+import { fieldShade, prepareField, type Layout } from '$lib/core';
+import { emptyPlot, modelLibrary } from '$lib/schema';
+import { castersOf } from './shaded-by';
+
+const place = {
+	latitudeDeg: 41.2,
+	longitudeDeg: 14.5,
+	altitudeM: 300,
+	timeZone: 'Europe/Rome',
+	magneticDeclinationDeg: 0
+};
+const model = modelLibrary[1];
+/** Three in a line from west to east, 13 m apart, and one far to the north. */
+const spots: [string, number, number][] = [
+	['west', 0, 0],
+	['middle', 13, 0],
+	['east', 26, 0],
+	['north', 13, 60]
+];
+const layout: Layout = {
+	version: 1,
+	models: [model],
+	trackers: spots.map(([id, eastM, northM]) => ({
+		id,
+		tag: id,
+		modelId: model.id,
+		eastM,
+		northM,
+		axisHeightM: null,
+		posture: { kind: 'following' }
+	})),
+	mounts: { common: null, exceptions: {}, fromRunId: null }
+};
+const field = prepareField({ place, plot: emptyPlot(), layout });
+
+describe('who shades a tracker', () => {
+	it('names the neighbours that stand up-sun, the one that shades most first', () => {
+		expect(castersOf(field, 0, { azimuthDeg: 90, elevationDeg: 5 })).toEqual([1, 2]);
+		expect(castersOf(field, 1, { azimuthDeg: 270, elevationDeg: 5 })).toEqual([0]);
+	});
+
+	it('names none exactly when the tracker is in full sun', () => {
+		for (const sun of [
+			{ azimuthDeg: 90, elevationDeg: 5 },
+			{ azimuthDeg: 120, elevationDeg: 9 },
+			{ azimuthDeg: 180, elevationDeg: 25 },
+			{ azimuthDeg: 240, elevationDeg: 6 }
+		]) {
+			const shares = fieldShade(field, sun);
+			layout.trackers.forEach((_, index) => {
+				expect(castersOf(field, index, sun).length > 0).toBe(shares[index] > 1e-9);
+			});
+		}
+	});
+});
