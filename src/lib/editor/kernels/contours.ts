@@ -29,6 +29,8 @@ export function contourLines(ground: Ground, boundary: readonly BoundaryPart[], 
 			.sort((a, b) => a - b);
 		const up = height / perMetre;
 		for (let i = 0; i + 1 < crossings.length; i += 2) {
+			// A level that only touches the edge gives no line.
+			if (crossings[i + 1] - crossings[i] < 1e-6) continue;
 			const point = (a: number): PlanPoint => [a * along[0] + up * rise[0], a * along[1] + up * rise[1]];
 			lines.push([point(crossings[i]), point(crossings[i + 1])]);
 		}
