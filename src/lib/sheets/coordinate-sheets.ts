@@ -3,7 +3,7 @@ import { formatBearing, formatNumber } from '../i18n';
 import type { PegRow } from '../schema/peg-row';
 import { checkSums, toMillimetre } from './check-sums';
 import { drawList, rowsThatFit, type ListColumn } from './list-sheet';
-import { mountInWords } from './mount-words';
+import { mountInShort } from './mount-words';
 import { obstacleCodes } from './obstacle-codes';
 import type { Pen } from './pen';
 import type { PlanContent } from './plan-content';
@@ -65,7 +65,7 @@ function cells(row: PegRow, model: PlanContent['layout']['models'][number] | und
 		formatNumber(row.reachM, 2),
 		row.stops ? `${formatBearing(row.stops.fromDeg)} – ${formatBearing(row.stops.toDeg)}` : 'turns freely',
 		row.modelName,
-		row.mount && model ? `${row.ownMount ? 'own: ' : ''}${mountInWords(row.mount, model)}` : 'not chosen'
+		row.mount && model ? `${row.ownMount ? 'OWN: ' : ''}${mountInShort(row.mount, model)}` : 'not chosen'
 	];
 }
 

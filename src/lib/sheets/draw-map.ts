@@ -244,7 +244,8 @@ export function drawTags(pen: Pen, tags: PlacedTag[]): void {
 			capMm: tag.capMm,
 			weight: tag.optional ? 600 : 800,
 			anchor: 'middle',
-			colour: tag.optional ? c.inkSoft : c.ink
+			colour: tag.optional ? c.inkSoft : c.ink,
+			halo: c.white
 		});
 	}
 }

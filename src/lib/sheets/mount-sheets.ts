@@ -13,7 +13,7 @@ import { framedSheet, footStrip, upperSpace } from './sheet-frame';
 import { sheetColours as c } from './sheet-colours';
 import type { SheetBuilder } from './site-sheets';
 
-const frontSpace: PaperRect = { xMm: 26, yMm: 30, widthMm: 190, heightMm: 150 };
+const frontSpace: PaperRect = { xMm: 30, yMm: 40, widthMm: 202, heightMm: 180 };
 const LARGEST_REDUCTION = 5;
 
 /** One mount drawing for each tracker model in use: the field's common place on that model's table. */
@@ -31,7 +31,7 @@ function mountSheet(
 ) {
 	const name = several ? `Sensor mount on ${model.name}` : 'Sensor mount';
 	const { common } = content.layout.mounts;
-	const reduction = chooseReduction([model.widthM, model.heightM], [130, 105], LARGEST_REDUCTION);
+	const reduction = chooseReduction([model.widthM, model.heightM], [168, 118], LARGEST_REDUCTION);
 	const scale = `1:${reduction}`;
 	return framedSheet(content, place, { name, documentType: 'Mount drawing', scale }, (pen) => {
 		pen.text('words', [26, 19], name, { capMm: 3.6, weight: 800 });
@@ -44,33 +44,42 @@ function mountSheet(
 		const mmPerM = 1000 / reduction;
 		const centre: PaperPoint = [
 			frontSpace.xMm + frontSpace.widthMm / 2,
-			frontSpace.yMm + frontSpace.heightMm / 2 + 8
+			frontSpace.yMm + frontSpace.heightMm / 2
 		];
-		drawTable(pen, model, centre, mmPerM);
+		const d = common ? mountDimensions(common, model) : null;
+		drawTable(pen, model, centre, mmPerM, [d?.rightM ?? 0, d?.upM ?? 0]);
 		if (common) drawMount(pen, common, model, centre, mmPerM);
 		else {
 			pen.text('words', [centre[0], centre[1] + 2], 'MOUNT NOT CHOSEN', {
 				capMm: 5,
 				weight: 800,
 				anchor: 'middle',
-				colour: c.stop
+				colour: c.stop,
+				halo: c.frost
 			});
 			pen.text('words', [centre[0], centre[1] + 8], 'Open point: fit no sensor from this sheet.', {
 				capMm: 2.4,
 				weight: 600,
 				anchor: 'middle',
-				colour: c.stop
+				colour: c.stop,
+				halo: c.frost
 			});
 		}
 		drawSide(pen, common, model);
 		drawExceptions(pen, content, model);
 		drawStopsAndPostures(pen, model);
-		drawMountFoot(pen, model, common ? mountDimensions(common, model) : null);
+		drawMountFoot(pen, d);
 	});
 }
 
 /** Glass with module lines and clear slot, steel outline around it, names of the edges. */
-function drawTable(pen: Pen, model: TrackerModel, centre: PaperPoint, mmPerM: number): void {
+function drawTable(
+	pen: Pen,
+	model: TrackerModel,
+	centre: PaperPoint,
+	mmPerM: number,
+	[headRightM, headUpM]: [number, number]
+): void {
 	const [cx, cy] = centre;
 	const w = model.widthM * mmPerM;
 	const h = model.heightM * mmPerM;
@@ -110,24 +119,14 @@ function drawTable(pen: Pen, model: TrackerModel, centre: PaperPoint, mmPerM: nu
 		const y = cy - h / 2 + (j * h) / model.moduleRows;
 		for (const left of halves) pen.line('table', [left, y], [left + halfWidth, y], line);
 	}
-	pen.text('words', [cx, cy + h / 2 - 2.4], 'bottom edge', { capMm: 2, anchor: 'middle', colour: c.inkSoft });
-	pen.text('words', [cx - w / 2 + 3.6, cy], 'left side', {
-		capMm: 2,
-		anchor: 'middle',
-		colour: c.inkSoft,
-		turnDeg: -90
-	});
-	pen.text('words', [cx + w / 2 - 1.6, cy], 'right side', {
-		capMm: 2,
-		anchor: 'middle',
-		colour: c.inkSoft,
-		turnDeg: -90
-	});
-	pen.text('words', [cx, cy - h / 2 + 4.4], 'top edge (uppermost when tilted)', {
-		capMm: 2,
-		anchor: 'middle',
-		colour: c.inkSoft
-	});
+	// Names stand outside the glass, in the quarter that the head is not in.
+	const quarter = (headRightM > 0 ? -1 : 1) * (w / 4);
+	const name = { capMm: 2, anchor: 'middle', colour: c.inkSoft } as const;
+	pen.text('words', [cx + quarter, cy - h / 2 - margin - 1.6], 'top edge (uppermost when tilted)', name);
+	pen.text('words', [cx + quarter, cy + h / 2 + margin + 3.6], 'bottom edge', name);
+	const aside = (headUpM > 0 ? 1 : -1) * (h / 4);
+	pen.text('words', [cx - w / 2 - margin - 1.6, cy + aside], 'left side', { ...name, turnDeg: -90 });
+	pen.text('words', [cx + w / 2 + margin + 3.6, cy + aside], 'right side', { ...name, turnDeg: -90 });
 	dimensionAcross(
 		pen,
 		[cx - w / 2, cy + h / 2 + margin],
@@ -154,9 +153,11 @@ function drawMount(pen: Pen, mount: Mount, model: TrackerModel, centre: PaperPoi
 	const exit: PaperPoint = [head[0], Math.min(head[1] + 13, bottomY + 10)];
 	pen.line('table', head, exit, { colour: c.sun, widthMm: 0.7, dashMm: [1.6, 0.8] });
 	pen.arrowHead('table', [exit[0], exit[1] + 1.6], 180, 3, c.sun);
-	pen.text('words', [exit[0] + 2.4, exit[1] - 1.2], 'lead leaves downward, with a drip loop', {
+	const away = d.rightM > 0 ? -1 : 1;
+	pen.text('words', [exit[0] + away * 2.4, exit[1] - 1.2], 'lead leaves downward, with a drip loop', {
 		weight: 600,
-		colour: c.ink
+		anchor: away > 0 ? 'start' : 'end',
+		halo: c.frost
 	});
 	pen.circle('table', head, Math.max(1.6, model.sensorHeadRadiusM * mmPerM), {
 		fill: { colour: c.sun },
@@ -166,7 +167,7 @@ function drawMount(pen: Pen, mount: Mount, model: TrackerModel, centre: PaperPoi
 	pen.line('table', [head[0], head[1] - 3], [head[0], head[1] + 3], { colour: c.ink, widthMm: 0.2 });
 
 	const above = Math.min(topY, head[1]) - 12;
-	dimensionAcross(pen, [sideX, topY], head, above, millimetres(d.fromSideM));
+	dimensionAcross(pen, [sideX, topY], head, above, `${millimetres(d.fromSideM)} from the ${d.side} side`);
 	const rightX = centre[0] + (model.widthM / 2) * mmPerM;
 	const beside = Math.max(rightX, head[0]) + 14;
 	const label =
@@ -174,16 +175,11 @@ function drawMount(pen: Pen, mount: Mount, model: TrackerModel, centre: PaperPoi
 			? `${millimetres(-d.fromTopM)} above the top edge`
 			: `${millimetres(d.fromTopM)} from the top edge`;
 	dimensionDown(pen, [rightX, topY], head, beside, label);
-	pen.text('words', [centre[0], above - 5.4], `from the ${d.side} side`, {
-		capMm: 2.2,
-		weight: 600,
-		anchor: 'middle'
-	});
 }
 
 /** A cut through the edge: how far the head stands out and ahead. Drawn without scale, figures rule. */
 function drawSide(pen: Pen, mount: Mount | null, model: TrackerModel): void {
-	const x = 236;
+	const x = 242;
 	const y = 30;
 	pen.text('words', [x, y], 'Side view of the edge', { capMm: 2.6, weight: 800 });
 	pen.text('words', [x, y + 4], 'not to scale, figures rule', { colour: c.inkSoft });
@@ -300,7 +296,7 @@ function drawStopsAndPostures(pen: Pen, model: TrackerModel): void {
 	);
 }
 
-function drawMountFoot(pen: Pen, model: TrackerModel, d: MountDimensions | null): void {
+function drawMountFoot(pen: Pen, d: MountDimensions | null): void {
 	const { xMm: x, yMm: y } = footStrip;
 	pen.rect('frame', footStrip, { fill: { colour: c.white }, stroke: { colour: c.ink, widthMm: 0.35 } });
 	pen.text('words', [x + 5, y + 6], 'Cautions', { capMm: 2.4, weight: 800, colour: c.stop });

@@ -55,3 +55,11 @@ export function mountInWords(mount: Mount, model: TrackerModel): string {
 	const forward = `${millimetres(Math.abs(d.forwardM))} ${d.forwardM < 0 ? 'behind' : 'ahead of'} the glass`;
 	return `${mount.edge} edge, ${along}, ${out}, ${forward} (mm)`;
 }
+
+/** `top edge, right side 2400, out 80, ahead 30`: for a narrow column. */
+export function mountInShort(mount: Mount, model: TrackerModel): string {
+	const d = mountDimensions(mount, model);
+	const level = mount.edge === 'top' || mount.edge === 'bottom';
+	const along = level ? `${d.side} side ${millimetres(d.fromSideM)}` : `below top ${millimetres(d.fromTopM)}`;
+	return `${mount.edge} edge, ${along}, out ${millimetres(d.outM)}, ahead ${millimetres(d.forwardM)}`;
+}

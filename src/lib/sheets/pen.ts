@@ -1,4 +1,5 @@
 import type { Fill, Layer, LetterWeight, Mark, PaperPoint, PaperRect, Stroke } from './drawing';
+import { lineWidthMm } from './font-book';
 import { lettered } from './letters';
 import { sheetColours } from './sheet-colours';
 import { wrap } from './text-fit';
@@ -10,6 +11,8 @@ export interface TextStyle {
 	colour?: string;
 	opacity?: number;
 	turnDeg?: number;
+	/** Colour of a patch that is laid under level text, so that lines do not run through it. */
+	halo?: string;
 }
 
 /** Collects the marks of one drawing. Every method takes the layer first. */
@@ -55,6 +58,7 @@ export class Pen {
 	text(layer: Layer, at: PaperPoint, text: string, style: TextStyle = {}): void {
 		const shown = lettered(text);
 		if (!shown) return;
+		if (style.halo) this.patch(layer, at, shown, style, style.halo);
 		this.marks.push({
 			kind: 'text',
 			layer,
@@ -67,6 +71,17 @@ export class Pen {
 			...(style.opacity === undefined ? {} : { opacity: style.opacity }),
 			...(style.turnDeg ? { turnDeg: style.turnDeg } : {})
 		});
+	}
+
+	private patch(layer: Layer, [x, y]: PaperPoint, text: string, style: TextStyle, colour: string): void {
+		const capMm = style.capMm ?? 1.8;
+		const width = lineWidthMm(text, capMm, style.weight ?? 400);
+		const left = style.anchor === 'middle' ? x - width / 2 : style.anchor === 'end' ? x - width : x;
+		this.rect(
+			layer,
+			{ xMm: left - 0.3, yMm: y - capMm - 0.3, widthMm: width + 0.6, heightMm: capMm + 0.6 },
+			{ fill: { colour, opacity: 0.8 } }
+		);
 	}
 
 	/** Wrapped text under a top left corner; answers the y under its last line. */

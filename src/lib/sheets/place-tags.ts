@@ -61,7 +61,7 @@ function placeAt(wishes: TagWish[], window: PaperRect, capMm: number, leaders: b
 				const box: Box = [cx - w / 2, cy - h / 2, cx + w / 2, cy + h / 2];
 				const inside = box[0] > edge[0] && box[1] > edge[1] && box[2] < edge[2] && box[3] < edge[3];
 				if (!inside || taken.hits(box)) return;
-				const cost = circles.near(box).filter((i) => circleCuts(wishes[i], box)).length * 4 + rank * 0.5;
+				const cost = circles.near(box).filter((i) => circleCuts(wishes[i], box)).length * 12 + rank * 0.5;
 				if (!best || cost < best.cost) best = { box, cost, leader };
 			});
 		};

@@ -78,7 +78,7 @@ function drawTitleBlock(
 		{ stroke: { colour: c.ink, widthMm: 0.25 } }
 	);
 	pen.text('frame', [x + 1.5, top + 3.4], 'Title', { colour: c.inkSoft });
-	const title = fitLines(heading.project, 81, 2, [3.6, 3.2, 2.8, 2.4, 2, 1.8], 800);
+	const title = fitLines(heading.project, 70, 2, [3.6, 3.2, 2.8, 2.4, 2, 1.8], 800);
 	let line = top + 5.2 + title.capMm;
 	for (const text of title.lines) {
 		pen.text('frame', [x + 1.5, line], text, { capMm: title.capMm, weight: 800 });

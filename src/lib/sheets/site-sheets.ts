@@ -65,9 +65,9 @@ export function siteSheets(content: PlanContent): SheetBuilder[] {
 		const placed = mapTags(content, rows, map, false) ?? mapTags(content, rows, map, true) ?? [];
 		return siteSheet(content, name, map, own, placed, []);
 	});
-	const outlines = groups.map((rows, i) => ({ extent: groupExtent(rows), label: `part ${i + 1}` }));
+	const outlines = groups.map((rows, i) => ({ extent: groupExtent(rows), after: i + 1 }));
 	return [
-		siteSheet(content, 'Site plan and key to the setting-out sheets', whole, all, tags ?? [], outlines),
+		siteSheet(content, 'Site plan and key to the setting-out sheets', whole, all, [], outlines),
 		...sheets
 	];
 }
@@ -144,7 +144,7 @@ function siteSheet(
 	map: MapFrame,
 	own: Set<string>,
 	tags: PlacedTag[],
-	outlines: { extent: Extent; label: string }[]
+	outlines: { extent: Extent; after: number }[]
 ): SheetBuilder {
 	const scale = `1:${map.reduction}`;
 	return (place) =>
@@ -157,14 +157,16 @@ function siteSheet(
 				drawOrigin(inside, map);
 				drawTrackers(inside, content.rows, own, map);
 				drawTags(inside, tags);
-				for (const outline of outlines) drawOutline(inside, map, outline);
+				for (const { extent, after } of outlines) {
+					drawOutline(inside, map, extent, `sheet ${place.number + after}`);
+				}
 			});
 			drawSidePanel(pen, content, sidePanel);
 			drawSiteFoot(pen, content, map.reduction, hiddenNote(content, map));
 		});
 }
 
-function drawOutline(pen: Pen, map: MapFrame, { extent, label }: { extent: Extent; label: string }): void {
+function drawOutline(pen: Pen, map: MapFrame, extent: Extent, label: string): void {
 	const [x0, y0] = map.toPaper([extent.minEastM, extent.maxNorthM]);
 	const [x1, y1] = map.toPaper([extent.maxEastM, extent.minNorthM]);
 	pen.rect(
@@ -172,7 +174,12 @@ function drawOutline(pen: Pen, map: MapFrame, { extent, label }: { extent: Exten
 		{ xMm: x0, yMm: y0, widthMm: x1 - x0, heightMm: y1 - y0 },
 		{ stroke: { colour: c.sun, widthMm: 0.5, dashMm: [5, 1.5] } }
 	);
-	pen.text('words', [x0 + 1.5, y0 - 1.2], label, { capMm: 2.6, weight: 800, colour: c.sun });
+	pen.text('words', [(x0 + x1) / 2, (y0 + y1) / 2 + 2], label, {
+		capMm: 4,
+		weight: 800,
+		anchor: 'middle',
+		halo: c.white
+	});
 }
 
 function hiddenNote(content: PlanContent, map: MapFrame): string | null {
