@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { openDatabase } from './lib/database.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { root } from './lib/paths.mjs';
-import { endChild, isPortFree, stopOnSignal } from './lib/process.mjs';
+import { isPortFree, superviseChild } from './lib/process.mjs';
 import { Refusal, runMain, say } from './lib/say.mjs';
 import { appEnvironment, demoLines } from './lib/settings.mjs';
 
@@ -31,18 +31,9 @@ runMain(async () => {
 		{
 			cwd: root,
 			stdio: ['ignore', 'inherit', 'inherit'],
-			detached: true,
 			env: appEnvironment({ url: database.url, ownDatabase: database.own, origin: `http://${host}:${port}` })
 		}
 	);
-	const stop = async () => {
-		await endChild(vite);
-		await database.stop();
-	};
-	stopOnSignal(stop);
-	vite.once('exit', async (code) => {
-		await database.stop();
-		process.exit(code ?? 1);
-	});
+	superviseChild(vite, database.stop);
 	say(`\nTiltyard for work: http://${host}:${port}\n${demoLines().join('\n')}\n`);
 });

@@ -1,5 +1,6 @@
 import { error, redirect, type Handle, type HandleServerError, type ServerInit } from '@sveltejs/kit';
 import { authenticate } from '$lib/server/auth/authenticate';
+import { closeDatabase } from '$lib/server/db';
 import { seedDemo } from '$lib/server/demo';
 import { isLocal, origin, seedsDemo } from '$lib/server/env';
 import { asAppError, problemResponse } from '$lib/server/errors';
@@ -12,6 +13,16 @@ import { startMail } from '$lib/server/mail';
 export const init: ServerInit = async () => {
 	await startMail();
 	if (seedsDemo()) await seedDemo();
+	// The server has let go of its connections: let go of the database too, so that the process can end.
+	process.once('sveltekit:shutdown', () => {
+		closeDatabase().then(
+			() => process.exit(0),
+			(reason: unknown) => {
+				logger.error({ error: reason }, 'the database connections did not close');
+				process.exit(1);
+			}
+		);
+	});
 };
 
 export const handle: Handle = async ({ event, resolve }) => {

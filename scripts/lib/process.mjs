@@ -64,21 +64,26 @@ export async function waitUntil(
 }
 
 /**
- * Calls `stop` once on Ctrl-C, SIGTERM or hang-up, and then ends this process.
- * @param {() => Promise<void>} stop
+ * Ties this command to its child: Ctrl-C, SIGTERM or hang-up end the child, then `cleanUp` runs, then this process
+ * ends. A child that ends by itself takes the command with it, with the child's status.
+ * @param {import('node:child_process').ChildProcess} child
+ * @param {() => Promise<void>} cleanUp
  */
-export function stopOnSignal(stop) {
-	let stopping = false;
+export function superviseChild(child, cleanUp) {
+	let asked = false;
 	for (const signal of /** @type {NodeJS.Signals[]} */ (['SIGINT', 'SIGTERM', 'SIGHUP']))
 		process.on(signal, () => {
-			if (stopping) return;
-			stopping = true;
-			stop().then(
-				() => process.exit(0),
-				(error) => {
-					process.stderr.write(`${error?.stack ?? error}\n`);
-					process.exit(1);
-				}
-			);
+			if (asked) return;
+			asked = true;
+			void endChild(child);
 		});
+	child.once('exit', (code) => {
+		cleanUp().then(
+			() => process.exit(asked ? 0 : (code ?? 1)),
+			(error) => {
+				process.stderr.write(`${error?.stack ?? error}\n`);
+				process.exit(1);
+			}
+		);
+	});
 }
