@@ -96,13 +96,13 @@ const sceneSkyline = z
 	.max(3_600, { error: 'Give at most 3600 skyline points.' })
 	.default([]);
 
-function refuseTwins(tables: { id: string }[], context: z.RefinementCtx): void {
+function refuseTwins(listed: { id: string }[], list: string, context: z.RefinementCtx): void {
 	const seen = new Set<string>();
-	tables.forEach((table, index) => {
-		if (seen.has(table.id)) {
-			context.addIssue({ code: 'custom', path: ['tables', index, 'id'], message: 'This id is used twice.' });
+	listed.forEach(({ id }, index) => {
+		if (seen.has(id)) {
+			context.addIssue({ code: 'custom', path: [list, index, 'id'], message: 'This id is used twice.' });
 		}
-		seen.add(table.id);
+		seen.add(id);
 	});
 }
 
@@ -116,7 +116,7 @@ export const shadeRequestSchema = z
 		obstacles: sceneObstacles,
 		skyline: sceneSkyline
 	})
-	.superRefine((scene, context) => refuseTwins(scene.tables, context));
+	.superRefine((scene, context) => refuseTwins(scene.tables, 'tables', context));
 
 export const shadeAnswerSchema = z.object({
 	tables: z.array(
@@ -159,7 +159,7 @@ export const mountRequestSchema = z
 			.max(20_000, { error: 'Give at most 20000 steps.' })
 	})
 	.superRefine((scene, context) => {
-		refuseTwins(scene.tables, context);
+		refuseTwins(scene.tables, 'tables', context);
 		if (!scene.tables.some((table) => table.id === scene.target)) {
 			context.addIssue({ code: 'custom', path: ['target'], message: 'No table has this id.' });
 		}
@@ -200,22 +200,41 @@ export const mountAnswerSchema = z.object({
 const { name: _name, widthM, heightM, ...otherMechanics } = trackerModelShape;
 void _name;
 
-export const fieldLossRequestSchema = z.object({
-	latitudeDeg,
-	longitudeDeg,
-	year: wholeNumber(1950, 2100),
-	stepMinutes: wholeNumber(1, 20).default(10),
-	refraction: z.boolean({ error: 'Give true or false.' }).default(true),
-	beam: z
-		.enum(['meinel', 'project'], { error: 'Give the beam as "meinel" or "project".' })
-		.default('project'),
-	altitudeM: quantity(-450, 6500, 'm above sea level').default(0),
-	model: z.object({ widthM, heightM, ...z.object(otherMechanics).partial().shape }),
-	trackers: z
-		.array(z.object({ id: idSchema, eastM: metres, northM: metres, upM: metres.default(0) }))
-		.min(1, { error: 'Give at least one tracker.' })
-		.max(MAX_FIELD_LOSS_TRACKERS, { error: `Give at most ${MAX_FIELD_LOSS_TRACKERS} trackers.` })
-});
+export const fieldLossRequestSchema = z
+	.object({
+		latitudeDeg,
+		longitudeDeg,
+		year: wholeNumber(1950, 2100),
+		stepMinutes: wholeNumber(1, 20).default(10),
+		refraction: z.boolean({ error: 'Give true or false.' }).default(true),
+		beam: z
+			.enum(['meinel', 'project'], { error: 'Give the beam as "meinel" or "project".' })
+			.default('project'),
+		altitudeM: quantity(-450, 6500, 'm above sea level').default(0),
+		model: z.object({ widthM, heightM, ...z.object(otherMechanics).partial().shape }),
+		trackers: z
+			.array(z.object({ id: idSchema, eastM: metres, northM: metres, upM: metres.default(0) }))
+			.min(1, { error: 'Give at least one tracker.' })
+			.max(MAX_FIELD_LOSS_TRACKERS, { error: `Give at most ${MAX_FIELD_LOSS_TRACKERS} trackers.` }),
+		only: z
+			.array(idSchema)
+			.min(1, { error: 'Give at least one id, or leave this out.' })
+			.max(MAX_FIELD_LOSS_TRACKERS)
+			.optional(),
+		points: z
+			.array(z.object({ xM: metres, yM: metres }))
+			.max(100, { error: 'Give at most 100 points.' })
+			.optional()
+	})
+	.superRefine((request, context) => {
+		refuseTwins(request.trackers, 'trackers', context);
+		const ids = new Set(request.trackers.map((tracker) => tracker.id));
+		request.only?.forEach((id, index) => {
+			if (!ids.has(id)) {
+				context.addIssue({ code: 'custom', path: ['only', index], message: 'No tracker has this id.' });
+			}
+		});
+	});
 
 export const fieldLossAnswerSchema = z.object({
 	daylightH: z.number(),
@@ -224,7 +243,10 @@ export const fieldLossAnswerSchema = z.object({
 			id: z.string(),
 			beamLoss: z.number(),
 			meanShadedShare: z.number(),
-			anyShadeShareOfDaylight: z.number()
+			anyShadeShareOfDaylight: z.number(),
+			points: z
+				.array(z.object({ xM: z.number(), yM: z.number(), shadedShareOfDaylight: z.number() }))
+				.optional()
 		})
 	)
 });

@@ -20,14 +20,16 @@ export const planFileSchema = z.strictObject({
 export const planSummarySchema = z.strictObject({
 	id: idSchema,
 	projectId: idSchema,
-	layoutId: idSchema,
+	/** null when the layout was deleted afterwards. */
+	layoutId: idSchema.nullable(),
 	layoutRevision: z.number().int(),
 	/** `A`, `B`, ... */
 	revision: z.string(),
 	title: z.string(),
 	reason: z.string(),
 	issuedAt: z.iso.datetime({ offset: true }),
-	issuedBy: z.string(),
+	/** Name of the person; null when the account is gone. */
+	issuedBy: z.string().nullable(),
 	files: z.array(planFileSchema)
 });
 export type PlanSummary = z.infer<typeof planSummarySchema>;

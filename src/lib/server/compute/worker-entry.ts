@@ -1,5 +1,5 @@
 import { gzipSync } from 'node:zlib';
-import { fieldLoss, mountScene, mountYear, shadeScene, shadeYear } from '../../core';
+import { fieldLoss, irradiance, mountScene, mountYear, shadeScene, shadeYear, sunPosition } from '../../core';
 import { roundedJson } from './rounded-json';
 import type { PackedResult, WorkerCall } from './tasks';
 
@@ -14,6 +14,15 @@ export default function work(call: WorkerCall): unknown {
 			return packed(call, (onProgress) => shadeYear(task.input, onProgress));
 		case 'mount-run':
 			return packed(call, (onProgress) => mountYear(task.input, undefined, onProgress));
+		case 'sun': {
+			const { latitudeDeg, longitudeDeg, times } = task.request;
+			return times.map((time) => ({
+				time,
+				...sunPosition(Date.parse(time), latitudeDeg, longitudeDeg)
+			}));
+		}
+		case 'irradiance':
+			return irradiance(task.request);
 		case 'shade-scene':
 			return shadeScene(task.scene);
 		case 'mount-scene':

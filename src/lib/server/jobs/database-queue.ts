@@ -64,10 +64,7 @@ export const databaseQueue: RunQueue = {
 	},
 
 	async report(run, progress, stage) {
-		const [done] = await db
-			.update(runs)
-			.set({ progress, stage, heartbeatAt: new Date() })
-			.where(ours(run));
+		const [done] = await db.update(runs).set({ progress, stage, heartbeatAt: new Date() }).where(ours(run));
 		if (done.affectedRows === 0) return 'lost';
 		const [row] = await db
 			.select({ cancelRequested: runs.cancelRequested })

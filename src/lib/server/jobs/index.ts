@@ -1,2 +1,2 @@
 export { startJobs, stopJobs, stopWorkingRun, wakeJobs } from './dispatcher';
-export { listenToRun } from './run-events';
+export { listenToRun, tellRun } from './run-events';

@@ -11,7 +11,10 @@ const REPORT_EVERY_MS = 1_000;
 /** A thread that was asked to stop and has not after this long is ended, milliseconds. */
 const STOP_PATIENCE_MS = 2_000;
 
-const stages = { 'shade-run': 'computing the shade of the year', 'mount-run': 'computing the mounts over the year' };
+const stages = {
+	'shade-run': 'computing the shade of the year',
+	'mount-run': 'computing the mounts over the year'
+};
 
 export type StopReason = 'asked' | 'lost' | 'shutdown';
 
