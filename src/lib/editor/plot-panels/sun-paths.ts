@@ -43,3 +43,8 @@ export function sunPath(
 	}
 	return { date, points, upMinutes: points.length * STEP_MINUTES, lostMinutes: lost * STEP_MINUTES };
 }
+
+export interface NamedPath {
+	name: string;
+	path: SunPath;
+}
