@@ -25,9 +25,9 @@ export interface TrackerShade {
 	tag: string;
 	/** 1 - beam with shade / beam without, over the year, 0..1. */
 	beamLoss: number;
-	/** Time-mean of the shaded share while the sun is up, 0..1. */
+	/** Time-mean of the shaded share while the sun is above horizon and skyline and in front of the table, 0..1. */
 	meanShadedShare: number;
-	/** Hours of the year with any shade from neighbours or obstacles. */
+	/** Hours of the year with any shade from neighbours or obstacles while the front faces the sun. */
 	shadedHours: number;
 	/** Beam on the table without and with shade, kWh/m² a year. */
 	beamKwhM2: number;
@@ -66,10 +66,19 @@ export interface DayShade {
 	sunAzimuthDeg: number[];
 	/** Apparent. */
 	sunElevationDeg: number[];
-	/** Mean over the field at each time. */
+	/** True while the skyline hides the sun: then every share is 1 and there is no beam. */
+	sunHidden: boolean[];
+	/** Mean over the trackers whose front faces the sun at each time. */
 	fieldShare: number[];
-	/** [tracker][time], 0..1. */
+	/** [tracker][time], 0..1; 1 while the sun is hidden or behind the table. */
 	shares: number[][];
+	/**
+	 * By tracker: highest apparent sun elevation of the day, degrees, at which neighbours or obstacles still shade more
+	 * than a thousandth of it; refined between the steps to 0.01 degrees. Null when it is never shaded.
+	 */
+	shadedUpToDeg: (number | null)[];
+	/** Trackers and times [tracker, time] at which a table has its back to the sun; these break no rule. */
+	backToSun: [tracker: number, time: number][];
 	/** Beam lost to shade over beam without, this day. */
 	beamLoss: number;
 	/** Same, by tracker. */
