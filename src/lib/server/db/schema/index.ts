@@ -1,4 +1,5 @@
 export * from './layouts';
+export * from './members';
 export * from './people';
 export * from './plans';
 export * from './projects';

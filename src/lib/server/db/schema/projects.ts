@@ -1,6 +1,5 @@
 /** A project with its place, rule and plot, every plot that was saved, and a team's own tracker models. */
 import { index, int, mysqlTable, primaryKey, text, varchar } from 'drizzle-orm/mysql-core';
-import type { AnyMySqlColumn } from 'drizzle-orm/mysql-core';
 import type { Place, Plot, TrackerModel, WinterRule } from '../../../core/document';
 import { document, idColumn, moment } from '../columns';
 import { users } from './people';
@@ -12,7 +11,7 @@ export const projects = mysqlTable(
 		id: idColumn('id').primaryKey(),
 		teamId: idColumn('team_id')
 			.notNull()
-			.references((): AnyMySqlColumn => teams.id, { onDelete: 'cascade' }),
+			.references(() => teams.id, { onDelete: 'cascade' }),
 		name: varchar('name', { length: 120 }).notNull(),
 		notes: text('notes').notNull(),
 		place: document<Place>('place').notNull(),
