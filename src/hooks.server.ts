@@ -7,11 +7,13 @@ import { asAppError, problemResponse } from '$lib/server/errors';
 import { refuseLongBody } from '$lib/server/http/body-limit';
 import { secure } from '$lib/server/http/headers';
 import { newRequestId } from '$lib/server/http/request-id';
+import { startJobs } from '$lib/server/jobs';
 import { logger } from '$lib/server/log';
 import { startMail } from '$lib/server/mail';
 
 export const init: ServerInit = async () => {
 	await startMail();
+	startJobs();
 	if (seedsDemo()) await seedDemo();
 	// The server has let go of its connections: let go of the database too, so that the process can end.
 	process.once('sveltekit:shutdown', () => {

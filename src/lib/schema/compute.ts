@@ -208,8 +208,8 @@ export const fieldLossRequestSchema = z
 		stepMinutes: wholeNumber(1, 20).default(10),
 		refraction: z.boolean({ error: 'Give true or false.' }).default(true),
 		beam: z
-			.enum(['meinel', 'project'], { error: 'Give the beam as "meinel" or "project".' })
-			.default('project'),
+			.enum(['meinel', 'clear'], { error: 'Give the beam as "meinel" or "clear".' })
+			.default('clear'),
 		altitudeM: quantity(-450, 6500, 'm above sea level').default(0),
 		model: z.object({ widthM, heightM, ...z.object(otherMechanics).partial().shape }),
 		trackers: z
