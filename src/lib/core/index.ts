@@ -24,3 +24,7 @@ export * from './run/day-shade';
 export * from './run/winter';
 export * from './run/shade-year';
 export * from './run/field-loss';
+export * from './mount/mount-scene';
+export * from './mount/places';
+export * from './mount/classes';
+export * from './mount/mount-year';

@@ -3,6 +3,7 @@ import { followAim } from '../machine/aim';
 import { centreOffset } from '../machine/pose';
 import type { TrackerModel } from '../document';
 import { ShadeEngine } from '../shade/engine';
+import { insideConvex } from '../shade/pieces';
 import { tableGroup } from '../field';
 import { positionFromPlace } from '../sun/position';
 import { SunSeries } from '../sun/series';
@@ -66,15 +67,6 @@ function wholeModel(model: FieldLossRequest['model']): TrackerModel {
 	};
 }
 
-function pointShaded(shadow: Float64Array, corners: number, x: number, y: number): boolean {
-	for (let k = 0, j = corners - 1; k < corners; j = k++) {
-		const dx = shadow[2 * k] - shadow[2 * j];
-		const dy = shadow[2 * k + 1] - shadow[2 * j + 1];
-		if (dx * (y - shadow[2 * j + 1]) - dy * (x - shadow[2 * j]) <= 0) return false;
-	}
-	return true;
-}
-
 /**
  * Beam lost to neighbours over one UTC year in a field of equal followers without obstacles. With `refraction` false
  * and beam `meinel` it is the plain textbook sum: steps at mid-interval, airless elevation above 0, 1361 W/m².
@@ -134,7 +126,7 @@ export function fieldLoss(request: FieldLossRequest): FieldLossResult {
 				const hit = new Uint8Array(points.length);
 				engine.shadowsAhead(i, 0, (shadow, corners) => {
 					points.forEach((p, k) => {
-						if (!hit[k] && pointShaded(shadow, corners, p.xM, p.yM)) hit[k] = 1;
+						if (!hit[k] && insideConvex(shadow, corners, p.xM, p.yM)) hit[k] = 1;
 					});
 				});
 				hit.forEach((shaded, k) => (pointSteps[i * points.length + k] += shaded));

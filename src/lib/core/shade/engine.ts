@@ -277,6 +277,16 @@ export class ShadeEngine {
 		return this.nearCount + this.nearSolidCount;
 	}
 
+	/** Tables that the last `collect` found. */
+	collectedTables(): number[] {
+		return Array.from(this.near.subarray(0, this.nearCount));
+	}
+
+	/** Solids that the last `collect` found. */
+	collectedSolids(): Solid[] {
+		return Array.from(this.nearSolids.subarray(0, this.nearSolidCount), (k) => this.solids[k]);
+	}
+
 	/** Shaded share of table i, 0..1; 1 when its front is not lit. */
 	share(i: number): number {
 		if (this.cosine(i) <= LEAST_COSINE) return 1;

@@ -31,6 +31,16 @@ export function flatArea(points: Float64Array, from: number, corners: number): n
 	return twice / 2;
 }
 
+/** Whether a point lies strictly inside a flat convex counter-clockwise polygon with m corners. */
+export function insideConvex(points: Float64Array, m: number, x: number, y: number): boolean {
+	for (let k = 0, j = m - 1; k < m; j = k++) {
+		const dx = points[2 * k] - points[2 * j];
+		const dy = points[2 * k + 1] - points[2 * j + 1];
+		if (dx * (y - points[2 * j + 1]) - dy * (x - points[2 * j]) <= 0) return false;
+	}
+	return true;
+}
+
 /**
  * The lit part of a table as convex pieces, each with the share of light that it still gets. Shadows are subtracted
  * one after another: a piece that a shadow does not touch stays whole, else it is cut along the shadow's edges, the
