@@ -7,9 +7,11 @@ export const MAX_PAGE_SIZE = 200;
 /** Query of a list: how many, and where the page before ended. */
 export const pageQuerySchema = z.object({
 	limit: z
-		.union([z.undefined(), z.string().regex(/^\d{1,6}$/, { error: 'Give a whole number.' })])
-		.transform((text) => (text === undefined ? DEFAULT_PAGE_SIZE : Number(text)))
-		.pipe(wholeNumber(1, MAX_PAGE_SIZE)),
+		.string()
+		.regex(/^\d{1,6}$/, { error: `Give a whole number from 1 to ${MAX_PAGE_SIZE}.` })
+		.transform(Number)
+		.pipe(wholeNumber(1, MAX_PAGE_SIZE))
+		.default(DEFAULT_PAGE_SIZE),
 	cursor: z
 		.string()
 		.max(200, { error: 'This cursor is not one of ours: start from the first page.' })
