@@ -38,17 +38,8 @@ describe('why the top edge may be shaded', () => {
 		expect(unlevelReasons(plot, layout)).toEqual([
 			'the ground rises 9 m in 100 m',
 			'the axes stand at different heights',
-			'not every tracker follows the sun',
-			'the skyline hides the low sun'
+			'not every tracker follows the sun'
 		]);
-	});
-
-	it('counts stops only of models that stand in the field', () => {
-		const stopped = { ...model, id: 'stopped', stops: { fromDeg: 60, toDeg: 300 } };
-		expect(unlevelReasons(level, layoutOf([tracker('a')], [model, stopped]))).toEqual([]);
-		expect(unlevelReasons(level, layoutOf([tracker('a', { modelId: 'stopped' })], [model, stopped]))).toEqual(
-			['stops and tilt range hold tables back at the ends of the day']
-		);
 	});
 });
 

@@ -2,7 +2,7 @@ import type { Layout, Plot } from '$lib/core/document';
 
 /**
  * Why the top edge may be shaded here, in words, from what stands in the documents; empty on level ground with equal machines that all
- * follow the sun and nothing near.
+ * follow the sun and nothing near. Alike stops and the skyline are no reason: they hold every table back alike.
  */
 export function unlevelReasons(plot: Plot, layout: Layout): string[] {
 	const reasons: string[] = [];
@@ -21,9 +21,6 @@ export function unlevelReasons(plot: Plot, layout: Layout): string[] {
 	if (layout.trackers.some((tracker) => tracker.posture.kind !== 'following')) {
 		reasons.push('not every tracker follows the sun');
 	}
-	if (layout.models.some((model) => used.has(model.id) && (model.stops !== null || model.maxTiltDeg < 90))) {
-		reasons.push('stops and tilt range hold tables back at the ends of the day');
-	}
 	if (plot.obstacles.length) {
 		reasons.push(
 			plot.obstacles.length === 1
@@ -31,7 +28,6 @@ export function unlevelReasons(plot: Plot, layout: Layout): string[] {
 				: `${plot.obstacles.length} obstacles stand near`
 		);
 	}
-	if (plot.skyline.some((point) => point.elevationDeg > 0)) reasons.push('the skyline hides the low sun');
 	return reasons;
 }
 

@@ -1,0 +1,86 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, test } from '@playwright/test';
+import { signIn } from './helpers/sign-in';
+import { makeSmallField, moveFirstTracker } from './helpers/small-field';
+
+test.describe('the shade page', () => {
+	test('answers the shortest day at once, in words and row by row', async ({ page }) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId } = await makeSmallField(page);
+		await page.goto(`/projects/${projectId}/shade`);
+		await expect(page.getByTestId('verdict')).toContainText(/^(Met|Not met): /);
+		const strip = page.getByRole('slider', { name: /^Shade strip of 21 December/ });
+		await strip.focus();
+		await page.keyboard.press('ArrowRight');
+		await expect(strip).toHaveAttribute('aria-valuetext', /^A01 at \d\d:\d\d: \d+\u00a0% shaded, sun /);
+		await page.keyboard.press('ArrowDown');
+		await expect(strip).toHaveAttribute('aria-valuetext', /^A02 at /);
+		await page.keyboard.press('Enter');
+		await expect(page.getByText(/^A02(:| is)/)).toBeVisible();
+		await page.getByRole('button', { name: 'As a table: Every tracker through the day' }).click();
+		await expect(page.getByRole('table', { name: /Shade of each tracker on 21 December/ })).toContainText(
+			'B03'
+		);
+	});
+
+	test('computes the year, keeps it over a reload, and says when it is out of date', async ({ page }) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId, layoutId } = await makeSmallField(page);
+		await page.goto(`/projects/${projectId}/shade`);
+		await page.getByRole('button', { name: 'Compute the year' }).click();
+		const result = page.getByTestId('year-result');
+		await expect(result).toBeVisible({ timeout: 60_000 });
+		await expect(result.getByText('beam lost to shade', { exact: true }).first()).toBeVisible();
+		const figure = await result.locator('dl dd span').first().innerText();
+		expect(Number(figure.replace(/[^\d.]/g, ''))).toBeGreaterThan(0);
+		await expect(result.getByText('input hash')).toBeVisible();
+		await expect(result.getByText(/Not modelled here: the electrical loss/)).toBeVisible();
+
+		const table = result.getByRole('table', { name: /Shade of each tracker over the year/ });
+		await table.getByRole('button', { name: /^Beam lost/ }).click();
+		const losses = (await table.locator('tbody tr td:nth-child(2)').allInnerTexts()).map(Number);
+		expect(losses).toHaveLength(6);
+		expect(losses).toEqual([...losses].sort((a, b) => a - b));
+		const download = page.waitForEvent('download');
+		await result.getByRole('button', { name: 'Download CSV' }).last().click();
+		expect((await download).suggestedFilename()).toMatch(/^shade-\d{4}-by-tracker\.csv$/);
+
+		await page.reload();
+		await expect(page.getByTestId('year-result')).toBeVisible();
+		await expect(page.getByTestId('year-result').locator('dl dd span').first()).toHaveText(figure);
+		expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+
+		await moveFirstTracker(page, layoutId);
+		await page.reload();
+		await expect(page.getByText('Out of date', { exact: true })).toBeVisible();
+		await page.getByRole('button', { name: 'Compute again' }).click();
+		await expect(page.getByText('Out of date', { exact: true })).toBeHidden({ timeout: 60_000 });
+		await expect(page.getByTestId('year-result')).toBeVisible();
+	});
+
+	test('follows a run over a reload and cancels it', async ({ page }) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId } = await makeSmallField(page, { rows: 8, columns: 60 });
+		await page.goto(`/projects/${projectId}/shade`);
+		await page.getByLabel('Time step').selectOption('5');
+		await page.getByRole('button', { name: 'Compute the year' }).click();
+		await expect(page.getByRole('progressbar')).toBeVisible();
+		await page.reload();
+		await expect(page.getByRole('progressbar')).toBeVisible();
+		await page.getByRole('button', { name: 'Cancel the run' }).click();
+		await expect(page.getByText('The run was cancelled.')).toBeVisible({ timeout: 20_000 });
+		await expect(page.getByRole('button', { name: 'Compute the year' })).toBeEnabled();
+		await expect(page.getByTestId('year-result')).toBeHidden();
+	});
+
+	test('refuses a year out of range, keeps what was typed and says the range', async ({ page }) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId } = await makeSmallField(page);
+		await page.goto(`/projects/${projectId}/shade`);
+		const year = page.getByLabel('Year');
+		await year.fill('19');
+		await year.press('Enter');
+		await expect(year).toHaveValue('19');
+		await expect(year).toHaveAttribute('aria-invalid', 'true');
+	});
+});
