@@ -10,7 +10,7 @@ export interface RefusedForm {
 	typed: Record<string, string>;
 }
 
-const secrets = ['password', 'repeat'];
+const secrets = ['password', 'repeat', 'current'];
 
 /**
  * A form action: reads and checks the fields, then does the work. Bad fields and the work's own refusals come
