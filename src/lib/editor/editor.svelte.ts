@@ -1,5 +1,4 @@
 import { getContext, setContext } from 'svelte';
-import { SvelteSet } from 'svelte/reactivity';
 import { nextTags, type PlanPoint, type Tracker, type TrackerModel } from '$lib/core';
 import type { AlignGuide } from './kernels/align';
 import { addTrackers, removeTrackers } from './kernels/layout-edit';
@@ -38,8 +37,8 @@ export class Editor {
 	/** Answers whether the tool in hand had anything to give up. */
 	#cancelTool: (() => boolean) | null = null;
 
-	readonly selectedSet = $derived(new SvelteSet(this.selected));
-	readonly selectedTrackers = $derived<Tracker[]>(
+	readonly selectedSet: ReadonlySet<string> = $derived(new Set(this.selected));
+	readonly selectedTrackers = $derived.by((): Tracker[] =>
 		this.store.layout.trackers.filter((tracker) => this.selectedSet.has(tracker.id))
 	);
 

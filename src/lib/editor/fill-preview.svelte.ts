@@ -67,8 +67,8 @@ export class FillPreview {
 		return addTrackers(base, model, added);
 	});
 
-	readonly cover = $derived(this.layout ? groundCover(this.editor.store.plot, this.layout) : null);
-	readonly leastM = $derived(this.editor.model ? leastPitchM(this.editor.model) : 0);
+	readonly cover = $derived.by(() => (this.layout ? groundCover(this.editor.store.plot, this.layout) : null));
+	readonly leastM = $derived.by(() => (this.editor.model ? leastPitchM(this.editor.model) : 0));
 
 	useUsual(model: TrackerModel): void {
 		const { eastWestM, northSouthM } = usualPitch(model);

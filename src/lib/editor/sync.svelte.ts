@@ -99,9 +99,13 @@ export class DocumentSync<T> {
 		} finally {
 			this.#busy = false;
 		}
-		if (this.#pending !== null && this.#timer === null && this.state === 'unsaved' && this.message === null) {
-			this.#schedule(this.#delayMs);
-		}
+		this.#sendRest();
+	}
+
+	/** Edits that came in while a save was under way; a refused document waits for the next edit instead. */
+	#sendRest(): void {
+		const waits = this.#pending !== null && this.#timer === null;
+		if (waits && this.state === 'unsaved' && this.message === null) this.#schedule(this.#delayMs);
 	}
 
 	/** The connection is back: no need to wait for the next try. */
@@ -158,6 +162,7 @@ export class DocumentSync<T> {
 			return;
 		}
 		this.revision = revision;
+		this.message = null;
 		if (this.#pending !== null) this.#keepCopy(this.#pending);
 		this.state = 'unsaved';
 	}
