@@ -1,9 +1,16 @@
-import { error, redirect, type Handle, type HandleServerError, type ServerInit } from '@sveltejs/kit';
+import {
+	error,
+	redirect,
+	type Handle,
+	type HandleServerError,
+	type RequestEvent,
+	type ServerInit
+} from '@sveltejs/kit';
 import { authenticate } from '$lib/server/auth/authenticate';
 import { closeDatabase } from '$lib/server/db';
 import { seedDemo } from '$lib/server/demo';
 import { isLocal, origin, seedsDemo } from '$lib/server/env';
-import { asAppError, problemResponse } from '$lib/server/errors';
+import { asAppError, errorOfStatus, problemResponse } from '$lib/server/errors';
 import { refuseLongBody } from '$lib/server/http/body-limit';
 import { secure } from '$lib/server/http/headers';
 import { newRequestId } from '$lib/server/http/request-id';
@@ -37,7 +44,7 @@ export const handle: Handle = async ({ event, resolve }) => {
 	try {
 		refuseLongBody(url.pathname, request.headers.get('content-length'));
 		await authenticate(event);
-		response = await resolve(event);
+		response = await asProblem(await resolve(event), event);
 	} catch (thrown) {
 		// Refused at the door; refusals further in are answered by the page or endpoint that was asked.
 		const refused = asAppError(thrown);
@@ -59,6 +66,24 @@ export const handle: Handle = async ({ event, resolve }) => {
 		});
 	return response;
 };
+
+/** What the framework itself refuses on the API (an unknown path, a wrong method, a failure) speaks problem details too. */
+async function asProblem(response: Response, { url, locals }: RequestEvent): Promise<Response> {
+	const type = response.headers.get('content-type') ?? '';
+	if (!url.pathname.startsWith('/api/') || response.status < 400 || type.startsWith('application/problem'))
+		return response;
+	const body: unknown = type.startsWith('application/json') ? await response.json() : null;
+	const message =
+		body !== null && typeof body === 'object' && 'message' in body
+			? String(body.message)
+			: response.status === 405
+				? `This address does not take that method, only ${response.headers.get('allow') ?? 'others'}.`
+				: 'The request was refused.';
+	const problem = problemResponse(errorOfStatus(response.status, message), locals.requestId);
+	const allow = response.headers.get('allow');
+	if (allow) problem.headers.set('allow', allow);
+	return problem;
+}
 
 /**
  * A copy on one's own machine is opened as localhost as often as by its printed address, but sign-in and the

@@ -7,6 +7,7 @@ const statuses = {
 	unauthorised: [401, 'Not signed in'],
 	not_allowed: [403, 'Not allowed'],
 	not_found: [404, 'Not found'],
+	no_method: [405, 'Not a method that is taken here'],
 	conflict: [409, 'In conflict with what is there'],
 	stale: [412, 'Changed by somebody else meanwhile'],
 	too_large: [413, 'Too large'],
@@ -52,10 +53,14 @@ const codeOfStatus = (status: number): ErrorCode =>
 	(Object.keys(statuses) as ErrorCode[]).find((code) => statuses[code][0] === status) ??
 	(status < 500 ? 'malformed' : 'internal');
 
+/** For a refusal that only has a status and a sentence. */
+export const errorOfStatus = (status: number, message: string): AppError =>
+	new AppError(codeOfStatus(status), message);
+
 /** A thrown thing as an AppError; null when it was not thrown on purpose. */
 export function asAppError(thrown: unknown): AppError | null {
 	if (thrown instanceof AppError) return thrown;
-	if (isHttpError(thrown)) return new AppError(codeOfStatus(thrown.status), thrown.body.message);
+	if (isHttpError(thrown)) return errorOfStatus(thrown.status, thrown.body.message);
 	return null;
 }
 

@@ -1,9 +1,10 @@
-import { asc, eq } from 'drizzle-orm';
+import { eq } from 'drizzle-orm';
 import type { Me } from '$lib/schema/account';
 import type { Actor } from '../auth/actor';
 import { db } from '../db';
-import { teamMembers, teams, users } from '../db/schema';
+import { users } from '../db/schema';
 import { notFound } from '../errors';
+import { teamsOf } from './teams-of';
 
 /** Who the actor is, and the teams with the role in each. */
 export async function describeMe(actor: Actor): Promise<Me> {
@@ -12,11 +13,5 @@ export async function describeMe(actor: Actor): Promise<Me> {
 		.from(users)
 		.where(eq(users.id, actor.userId));
 	if (!user) throw notFound();
-	const mine = await db
-		.select({ id: teams.id, name: teams.name, role: teamMembers.role })
-		.from(teamMembers)
-		.innerJoin(teams, eq(teams.id, teamMembers.teamId))
-		.where(eq(teamMembers.userId, actor.userId))
-		.orderBy(asc(teams.id));
-	return { ...user, teams: mine };
+	return { ...user, teams: await teamsOf(actor) };
 }
