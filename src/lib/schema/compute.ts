@@ -142,6 +142,7 @@ export const mountRequestSchema = z
 			.max(MAX_SCENE_TABLES, { error: `Give at most ${MAX_SCENE_TABLES} tables.` }),
 		target: idSchema,
 		obstacles: sceneObstacles,
+		skyline: sceneSkyline,
 		points: z.object({
 			count: wholeNumber(2, 2_000),
 			insetM: quantity(-5, 100, 'm'),

@@ -3,6 +3,7 @@ import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { availableParallelism, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Piscina } from 'piscina';
+import { logger } from '../log';
 import workerSource from './worker-entry.ts?worker-source';
 
 /** Stored runs at once: at least two, so that a quick one does not wait behind a long one. */
@@ -16,7 +17,6 @@ const MAX_WAITING = 64;
 
 interface RunningPool {
 	pool: Piscina;
-	folder: string;
 	sourceHash: string;
 }
 
@@ -38,16 +38,18 @@ export function computePool(): Piscina {
 			idleTimeout: 60_000,
 			maxQueue: MAX_WAITING
 		});
-		holder.tiltyardPool = { pool, folder, sourceHash };
+		pool.on('error', (error: unknown) => logger.error({ error }, 'a worker thread ended'));
+		// Kept until the process ends: a thread that is just starting still reads it.
+		process.once('exit', () => rmSync(folder, { recursive: true, force: true }));
+		holder.tiltyardPool = { pool, sourceHash };
 	}
 	return holder.tiltyardPool.pool;
 }
 
-/** Stops every thread at once and takes the worker's file away. */
+/** Stops every thread at once. */
 export async function stopPool(): Promise<void> {
 	const running = holder.tiltyardPool;
 	if (!running) return;
 	holder.tiltyardPool = undefined;
 	await running.pool.destroy();
-	rmSync(running.folder, { recursive: true, force: true });
 }

@@ -27,7 +27,9 @@ export function runInput(sources: RunSources, terms: RunTerms): RunInput {
 		plot: sources.plot,
 		layout: sources.layout,
 		winterRule: sources.winterRule,
-		...terms,
+		year: terms.year,
+		stepMinutes: terms.stepMinutes,
+		treeYears: terms.treeYears,
 		utcOffsetMinutes: standardOffsetMinutes(sources.place.timeZone, terms.year)
 	};
 }
