@@ -37,7 +37,9 @@ async function connectRoot(/** @type {string} */ socketPath) {
 	} catch (error) {
 		// Not up yet, or a socket file that a killed server left behind: the caller waits or starts a new one.
 		if (
-			['ECONNREFUSED', 'ENOENT', 'PROTOCOL_CONNECTION_LOST', 'ECONNRESET', 'ETIMEDOUT'].includes(/** @type {any} */ (error)?.code)
+			['ECONNREFUSED', 'ENOENT', 'PROTOCOL_CONNECTION_LOST', 'ECONNRESET', 'ETIMEDOUT'].includes(
+				/** @type {any} */ (error)?.code
+			)
 		)
 			return null;
 		throw error;
