@@ -1,0 +1,24 @@
+import { describe, expect, it } from 'vitest';
+import { modelLibrary, newTrackerModelSchema } from '$lib/schema';
+import { groups } from './model-fields';
+
+const { id: _id, ...model } = modelLibrary[1];
+const fields = groups.flatMap((group) => group.fields);
+
+describe('the form of a tracker model', () => {
+	it('has a field for every number that a model holds', () => {
+		const numbers = Object.entries(model)
+			.filter(([key, value]) => typeof value === 'number' && key !== 'windTiltDeg')
+			.map(([key]) => key);
+		expect(fields.map((field) => field.key).sort()).toEqual(numbers.sort());
+	});
+
+	it.each(fields)('shows the range that the schema holds for $label', ({ key, min, max }) => {
+		const messageFor = (value: number) => {
+			const read = newTrackerModelSchema.safeParse({ ...model, [key]: value });
+			return read.success ? '' : (read.error.issues.find((issue) => issue.path[0] === key)?.message ?? '');
+		};
+		expect(messageFor(max + 1)).toContain(`${min} to ${max}`);
+		expect(messageFor(min - 1)).toContain(`${min} to ${max}`);
+	});
+});
