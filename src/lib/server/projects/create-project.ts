@@ -38,14 +38,18 @@ async function onlyTeam(actor: Actor): Promise<string> {
 }
 
 /** Opens a project at a place with an empty plot and a first layout. The time zone is found when none is given. */
-export async function createProject(actor: Actor, wish: z.output<typeof newProjectSchema>): Promise<Project> {
+export async function createProject(
+	actor: Actor,
+	wish: z.output<typeof newProjectSchema>,
+	id = newId()
+): Promise<Project> {
 	const teamId = wish.teamId ?? (await onlyTeam(actor));
 	const role = await requireTeam(actor, teamId, 'project.create');
 	const now = new Date();
 	const { place } = wish;
 	const plot = emptyPlot();
 	const row = {
-		id: newId(),
+		id,
 		teamId,
 		name: wish.name,
 		notes: wish.notes ?? '',
@@ -60,8 +64,8 @@ export async function createProject(actor: Actor, wish: z.output<typeof newProje
 		await tx.insert(projects).values(row);
 		await tx
 			.insert(plotRevisions)
-			.values({ projectId: row.id, revision: 1, document: plot, authorId: actor.userId, createdAt: now });
-		await insertLayout(tx, actor, row.id, 'Layout 1', emptyLayout());
+			.values({ projectId: id, revision: 1, document: plot, authorId: actor.userId, createdAt: now });
+		await insertLayout(tx, actor, id, 'Layout 1', emptyLayout());
 	});
 	return projectView(row, role);
 }
