@@ -30,6 +30,9 @@ export interface FieldInput {
 /** What throws and takes the shade: glass takes it, glass and frame margin throw it; the slot in the middle is clear. */
 export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
 	const sun: SunDirection = { azimuthDeg: 0, elevationDeg: 0 };
+	const stands = posture.kind === 'standing' || posture.kind === 'night';
+	const fixedAim = stands ? aimOf(model, posture, sun) : null;
+	const still = fixedAim ? { ...fixedAim, offset: centreOffset(model, fixedAim) } : null;
 	return {
 		halfWidth: model.widthM / 2,
 		halfHeight: model.heightM / 2,
@@ -37,6 +40,7 @@ export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
 		steelHalfHeight: model.heightM / 2 + model.frameMarginM,
 		halfGap: Math.max(0, Math.min(model.centreGapM, model.widthM)) / 2,
 		poseAt(azimuthDeg, elevationDeg) {
+			if (still) return still;
 			sun.azimuthDeg = azimuthDeg;
 			sun.elevationDeg = elevationDeg;
 			const aim = aimOf(model, posture, sun);

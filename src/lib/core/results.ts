@@ -74,7 +74,7 @@ export interface DayShade {
 	shares: number[][];
 	/**
 	 * By tracker: highest apparent sun elevation of the day, degrees, at which neighbours or obstacles still shade more
-	 * than a thousandth of it; refined between the steps to 0.01 degrees. Null when it is never shaded.
+	 * than a thousandth of it; refined between the steps to about 0.01 degrees. Null when it is never shaded.
 	 */
 	shadedUpToDeg: (number | null)[];
 	/** Trackers and times [tracker, time] at which a table has its back to the sun; these break no rule. */

@@ -6,10 +6,8 @@ import { SunSky } from './sun-steps';
 const DAY_MS = 86400000;
 /** Shade of less than this share of a table is no shade to the winter rule: a sliver that nobody can see. */
 export const SHADED_FROM = 0.001;
-/** Rounds of halving a step when the end of the shade is looked for: 2 minutes become a fifth of a second. */
-const HALVINGS = 10;
-/** Beyond this many trackers the end of the shade is read linearly between two steps instead of halved. */
-const MOST_REFINED = 3000;
+/** An interval in which shade ends is looked at in so many parts. */
+const PARTS = 16;
 
 /**
  * Shade of one site day: every `stepMinutes` from sunrise to sunset (the middle of each interval), by tracker and
@@ -81,8 +79,7 @@ export function dayShade(
 		fieldLit += lit[i];
 	}
 	day.beamLoss = fieldWithout > 0 ? 1 - fieldLit / fieldWithout : 0;
-	const back = new Set(day.backToSun.map(([i, k]) => i * day.timesMs.length + k));
-	day.shadedUpToDeg = day.shares.map((shares, i) => shadedUpTo(field, sky, day, shares, i, back, stepMs));
+	day.shadedUpToDeg = shadedUpTo(field, sky, day, stepMs);
 	return day;
 }
 
@@ -95,61 +92,66 @@ function dayWindowStart(field: Field, dateIso: string, utcOffsetMinutes: number)
 	return midnight + Math.round((low - midnight) / 3600000) * 3600000;
 }
 
-/** Highest sun of the day with shade on tracker i: the highest shaded step, then the end of the shade beyond it. */
-function shadedUpTo(
-	field: Field,
-	sky: SunSky,
-	day: DayShade,
-	shares: readonly number[],
-	i: number,
-	back: ReadonlySet<number>,
-	stepMs: number
-): number | null {
+/**
+ * Highest sun of the day with shade on each tracker: its highest shaded step, then the end of the shade between that
+ * and the clear step above. All trackers whose shade ends in one interval are asked together.
+ */
+function shadedUpTo(field: Field, sky: SunSky, day: DayShade, stepMs: number): (number | null)[] {
 	const n = day.timesMs.length;
-	const shaded = (k: number): boolean =>
-		k >= 0 && k < n && !day.sunHidden[k] && shares[k] > SHADED_FROM && !back.has(i * n + k);
-	let highest: number | null = null;
-	const raise = (elevation: number) => {
-		if (highest === null || elevation > highest) highest = elevation;
-	};
-	for (let k = 0; k < n; k++) {
-		if (!shaded(k)) continue;
-		raise(day.sunElevationDeg[k]);
-		for (const side of [-1, 1]) {
-			// Only an end towards the higher sun can raise the figure.
-			const j = k + side;
-			if (j < 0 || j >= n || shaded(j) || day.sunHidden[j] || back.has(i * n + j)) continue;
-			if (day.sunElevationDeg[j] <= (highest ?? -90)) continue;
-			raise(endOfShade(field, sky, i, day.timesMs[k], day.timesMs[k] + side * stepMs, day, shares, k, j));
+	const elevations = day.sunElevationDeg;
+	const back = new Set(day.backToSun.map(([i, k]) => i * n + k));
+	const ends = new Map<string, { k: number; j: number; trackers: number[] }>();
+	const highest = day.shares.map((shares, i): number | null => {
+		const counts = (k: number): boolean => !day.sunHidden[k] && !back.has(i * n + k);
+		const shaded = (k: number): boolean => shares[k] > SHADED_FROM && counts(k);
+		let top: number | null = null;
+		for (let k = 0; k < n; k++) if (shaded(k) && (top === null || elevations[k] > top)) top = elevations[k];
+		if (top === null) return null;
+		for (let k = 0; k < n; k++) {
+			if (!shaded(k)) continue;
+			for (const j of [k - 1, k + 1]) {
+				if (j < 0 || j >= n || !counts(j) || shaded(j) || elevations[j] <= top) continue;
+				const key = `${k} ${j}`;
+				const end = ends.get(key);
+				if (end) end.trackers.push(i);
+				else ends.set(key, { k, j, trackers: [i] });
+			}
 		}
+		return top;
+	});
+	for (const { k, j, trackers } of ends.values()) {
+		refineEnd(field, sky, day.timesMs[k], Math.sign(j - k) * stepMs, trackers, (i, elevation) => {
+			if (elevation > (highest[i] ?? -90)) highest[i] = elevation;
+		});
 	}
 	return highest;
 }
 
-function endOfShade(
+/**
+ * Walks one interval in sixteenths from its shaded to its clear side; where a tracker's shade ends, the end is read
+ * linearly between two sixteenths.
+ */
+function refineEnd(
 	field: Field,
 	sky: SunSky,
-	i: number,
 	shadedMs: number,
-	clearMs: number,
-	day: DayShade,
-	shares: readonly number[],
-	k: number,
-	j: number
-): number {
+	wayMs: number,
+	trackers: readonly number[],
+	found: (tracker: number, elevationDeg: number) => void
+): void {
 	const { engine } = field;
-	if (engine.count > MOST_REFINED) {
-		const part = (shares[k] - SHADED_FROM) / Math.max(1e-12, shares[k] - shares[j]);
-		return day.sunElevationDeg[k] + (day.sunElevationDeg[j] - day.sunElevationDeg[k]) * Math.min(1, part);
+	const last = new Map<number, { share: number; elevation: number }>();
+	for (let part = 0; part <= PARTS; part++) {
+		const sun = sky.at(shadedMs + (wayMs * part) / PARTS);
+		engine.setSun(sun.azimuthDeg, sun.elevationDeg, trackers.length > 4);
+		for (const i of trackers) {
+			const share = engine.cosine(i) > 0 ? engine.share(i) : 0;
+			const before = last.get(i);
+			if (before && before.share > SHADED_FROM && share <= SHADED_FROM) {
+				const to = (before.share - SHADED_FROM) / (before.share - share);
+				found(i, before.elevation + (sun.elevationDeg - before.elevation) * to);
+			}
+			last.set(i, { share, elevation: sun.elevationDeg });
+		}
 	}
-	let inside = shadedMs;
-	let outside = clearMs;
-	for (let round = 0; round < HALVINGS; round++) {
-		const mid = (inside + outside) / 2;
-		const sun = sky.at(mid);
-		engine.setSun(sun.azimuthDeg, sun.elevationDeg, false);
-		if (engine.cosine(i) > 0 && engine.share(i) > SHADED_FROM) inside = mid;
-		else outside = mid;
-	}
-	return sky.at((inside + outside) / 2).elevationDeg;
 }

@@ -16,10 +16,13 @@ export interface TableGroup {
 	/** Half of the clear slot in the middle; 0 is none. */
 	halfGap: number;
 	/** Pose at a sun: bearing, tilt and the way from the fixed point of a table to its middle. */
-	poseAt(
-		azimuthDeg: number,
-		elevationDeg: number
-	): { azimuthDeg: number; tiltDeg: number; offset: readonly [number, number, number] };
+	poseAt(azimuthDeg: number, elevationDeg: number): AimedPose;
+}
+
+export interface AimedPose {
+	azimuthDeg: number;
+	tiltDeg: number;
+	offset: readonly [number, number, number];
 }
 
 /** A table counts as turned away from the sun below this cosine. */
@@ -31,6 +34,7 @@ const MOST_SHADOW_CORNERS = 256;
 
 /** Where one group's tables point at the present sun. */
 class GroupPose {
+	aim: AimedPose | null = null;
 	azimuthDeg = 0;
 	tiltDeg = 0;
 	offset: readonly [number, number, number] = [0, 0, 0];
@@ -88,6 +92,9 @@ export class ShadeEngine {
 	private solidsEast = 0;
 	private solidsLow = 0;
 	private solidsHigh = 0;
+	/** Greatest half extents of any table in the view. */
+	private widest = 0;
+	private highest = 0;
 	private s: [number, number, number] = [0, 0, 1];
 	private axisX: [number, number, number] = [1, 0, 0];
 	private axisY: [number, number, number] = [0, 1, 0];
@@ -133,13 +140,18 @@ export class ShadeEngine {
 			const group = this.groups[g];
 			const pose = this.poses[g];
 			const aim = group.poseAt(azimuthDeg, elevationDeg);
-			pose.azimuthDeg = aim.azimuthDeg;
-			pose.tiltDeg = aim.tiltDeg;
-			pose.offset = aim.offset;
-			const { u, v, n } = tableAxes(aim.azimuthDeg, aim.tiltDeg);
-			pose.u = u;
-			pose.v = v;
-			pose.n = n;
+			// A table that stands still answers with the same pose again and again.
+			if (aim !== pose.aim) {
+				pose.aim = aim;
+				pose.azimuthDeg = aim.azimuthDeg;
+				pose.tiltDeg = aim.tiltDeg;
+				pose.offset = aim.offset;
+				const axes = tableAxes(aim.azimuthDeg, aim.tiltDeg);
+				pose.u = axes.u;
+				pose.v = axes.v;
+				pose.n = axes.n;
+			}
+			const { u, v, n } = pose;
 			const cosine = dot(n, s);
 			pose.cosine = cosine;
 			if (Math.abs(cosine) > LEAST_COSINE) {
@@ -169,7 +181,9 @@ export class ShadeEngine {
 		}
 		this.setSolids();
 		if (indexed) this.grid.build(viewX, viewY, this.count, 2 * widest, 2 * highest);
-		else this.grid.leave(this.count);
+		else this.grid.leave(viewX, viewY, this.count);
+		this.widest = widest;
+		this.highest = highest;
 	}
 
 	private setSolids(): void {
@@ -228,17 +242,25 @@ export class ShadeEngine {
 		const cy = this.north[i] + pose.offset[1];
 		const cz = this.up[i] + pose.offset[2];
 		this.nearCount = 0;
+		const reachX = ex + this.widest;
+		const reachY = ey + this.highest;
+		const { order, xs, ys } = grid;
 		const rows = grid.ask(x, y, ex, ey);
 		for (let r = 0; r < rows; r++) {
-			for (let k = grid.from[r]; k < grid.to[r]; k++) {
-				const j = grid.order[k];
+			const end = grid.to[r];
+			for (let k = grid.from[r]; k < end; k++) {
+				const dy = ys[k] - y;
+				if (dy >= reachY || -dy >= reachY) continue;
+				const dx = xs[k] - x;
+				if (dx >= reachX || -dx >= reachX) continue;
+				const j = order[k];
+				if (j === i) continue;
 				const g = groupOf[j];
 				const other = poses[g];
-				const dx = viewX[j] - x;
-				if (dx >= ex + other.extentX || -dx >= ex + other.extentX) continue;
-				const dy = viewY[j] - y;
-				if (dy >= ey + other.extentY || -dy >= ey + other.extentY) continue;
-				if (j === i) continue;
+				if (other !== pose) {
+					if (dx >= ex + other.extentX || -dx >= ex + other.extentX) continue;
+					if (dy >= ey + other.extentY || -dy >= ey + other.extentY) continue;
+				}
 				const o = other.offset;
 				const ahead =
 					n[0] * (this.east[j] + o[0] - cx) +

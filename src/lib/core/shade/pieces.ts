@@ -63,7 +63,12 @@ export class LitPieces {
 
 	addRect(x0: number, x1: number, y0: number, y1: number): void {
 		if (x1 <= x0 || y1 <= y0) return;
-		this.push(this.now, Float64Array.of(x0, y0, x1, y0, x1, y1, x0, y1), 0, 4, 1);
+		const r = this.rest;
+		r[0] = r[6] = x0;
+		r[2] = r[4] = x1;
+		r[1] = r[3] = y0;
+		r[5] = r[7] = y1;
+		this.push(this.now, r, 0, 4, 1);
 	}
 
 	/** Light-weighted area of all pieces, m². */

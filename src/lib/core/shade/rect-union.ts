@@ -66,15 +66,17 @@ export class RectUnion {
 		}
 		if (this.cuts.length < 2 * n) this.cuts = new Float64Array(4 * n);
 		const cuts = this.cuts;
-		for (let k = 0; k < n; k++) {
-			cuts[2 * k] = r[k * 4];
-			cuts[2 * k + 1] = r[k * 4 + 1];
+		for (let k = 0; k < 2 * n; k++) {
+			// Left and right sides, kept in order: few enough for insertion, and nothing is allocated.
+			const x = r[(k >> 1) * 4 + (k & 1)];
+			let at = k;
+			for (; at > 0 && cuts[at - 1] > x; at--) cuts[at] = cuts[at - 1];
+			cuts[at] = x;
 		}
-		const sorted = cuts.subarray(0, 2 * n).sort();
 		let area = 0;
-		for (let c = 0; c + 1 < sorted.length; c++) {
-			const left = sorted[c];
-			const right = sorted[c + 1];
+		for (let c = 0; c + 1 < 2 * n; c++) {
+			const left = cuts[c];
+			const right = cuts[c + 1];
 			if (right <= left) continue;
 			let covered = 0;
 			let top = -Infinity;

@@ -6,6 +6,9 @@
 export class ViewGrid {
 	/** Points by cell. */
 	order = new Int32Array(0);
+	/** Where the points of `order` stand in the view. */
+	xs = new Float64Array(0);
+	ys = new Float64Array(0);
 	/** Runs of `order` that the last question found. */
 	readonly from = new Int32Array(64);
 	readonly to = new Int32Array(64);
@@ -26,12 +29,16 @@ export class ViewGrid {
 		if (this.order.length >= count && this.order.length > 0) return;
 		this.order = new Int32Array(Math.max(1, count));
 		this.cellOf = new Int32Array(Math.max(1, count));
+		this.xs = new Float64Array(Math.max(1, count));
+		this.ys = new Float64Array(Math.max(1, count));
 		this.whole = 0;
 	}
 
 	/** No cells: every question answers with all points. */
-	leave(count: number): void {
+	leave(xs: Float64Array, ys: Float64Array, count: number): void {
 		this.size(count);
+		this.xs.set(xs);
+		this.ys.set(ys);
 		this.columns = 0;
 		if (this.whole !== count) for (let k = 0; k < count; k++) this.order[k] = k;
 		this.whole = count;
@@ -40,7 +47,7 @@ export class ViewGrid {
 	/** Sorts points whose outlines are at most `width` x `height`. */
 	build(xs: Float64Array, ys: Float64Array, count: number, width: number, height: number): void {
 		if (count < 12) {
-			this.leave(count);
+			this.leave(xs, ys, count);
 			return;
 		}
 		this.size(count);
@@ -81,7 +88,10 @@ export class ViewGrid {
 		for (let c = 0; c < cells; c++) starts[c + 1] += starts[c];
 		for (let k = count - 1; k >= 0; k--) {
 			// Filled from behind: the counts come back to be the starts, and points keep their order in a cell.
-			order[--starts[cellOf[k] + 1]] = k;
+			const at = --starts[cellOf[k] + 1];
+			order[at] = k;
+			this.xs[at] = xs[k];
+			this.ys[at] = ys[k];
 		}
 		// Each entry c + 1 now holds the start of cell c.
 	}

@@ -88,7 +88,10 @@ const R1: readonly Term[] = [
 
 const sum = (terms: readonly Term[], millennia: number): number => {
 	let total = 0;
-	for (const [amplitude, phase, rate] of terms) total += amplitude * Math.cos(phase + rate * millennia);
+	for (let k = 0; k < terms.length; k++) {
+		const term = terms[k];
+		total += term[0] * Math.cos(term[1] + term[2] * millennia);
+	}
 	return total;
 };
 
