@@ -18,7 +18,10 @@ export async function followRun(actor: Actor, runId: string): Promise<ReadableSt
 	return new ReadableStream<Uint8Array>({
 		start(controller) {
 			let last = '';
+			// A look into the database may come back after the reader has gone.
+			let open = true;
 			const tell = (event: RunEvent) => {
+				if (!open) return;
 				const { status, progress, stage } = event;
 				const data = JSON.stringify({ status, progress, stage });
 				// A comment keeps the line open through proxies while nothing changes.
@@ -33,9 +36,10 @@ export async function followRun(actor: Actor, runId: string): Promise<ReadableSt
 				findRun(actor, runId, 'run.read').then(
 					(row) => {
 						if (row.status !== 'working' || isNews(last, row)) tell(row);
-						else controller.enqueue(text.encode(': still here\n\n'));
+						else if (open) controller.enqueue(text.encode(': still here\n\n'));
 					},
 					(error: unknown) => {
+						if (!open) return;
 						logger.info({ error, runId }, 'a run that was followed is gone');
 						leave();
 						controller.close();
@@ -43,6 +47,7 @@ export async function followRun(actor: Actor, runId: string): Promise<ReadableSt
 				);
 			}, LOOK_EVERY_MS);
 			leave = () => {
+				open = false;
 				clearInterval(looks);
 				stopListening();
 				leave = () => {};
