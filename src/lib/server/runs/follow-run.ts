@@ -18,31 +18,31 @@ export async function followRun(actor: Actor, runId: string): Promise<ReadableSt
 	return new ReadableStream<Uint8Array>({
 		start(controller) {
 			let last = '';
-			// A look into the database may come back after the reader has gone.
 			let open = true;
+			const write = (line: string) => controller.enqueue(text.encode(line));
+			const end = () => {
+				leave();
+				controller.close();
+			};
 			const tell = (event: RunEvent) => {
 				if (!open) return;
 				const { status, progress, stage } = event;
 				const data = JSON.stringify({ status, progress, stage });
 				// A comment keeps the line open through proxies while nothing changes.
-				controller.enqueue(text.encode(data === last ? ': still here\n\n' : `data: ${data}\n\n`));
+				write(data === last ? ': still here\n\n' : `data: ${data}\n\n`);
 				last = data;
-				if (!hasEnded(event)) return;
-				leave();
-				controller.close();
+				if (hasEnded(event)) end();
 			};
 			const stopListening = listenToRun(runId, tell);
 			const looks = setInterval(() => {
 				findRun(actor, runId, 'run.read').then(
 					(row) => {
 						if (row.status !== 'working' || isNews(last, row)) tell(row);
-						else if (open) controller.enqueue(text.encode(': still here\n\n'));
+						else if (open) write(': still here\n\n');
 					},
 					(error: unknown) => {
-						if (!open) return;
 						logger.info({ error, runId }, 'a run that was followed is gone');
-						leave();
-						controller.close();
+						if (open) end();
 					}
 				);
 			}, LOOK_EVERY_MS);
@@ -50,7 +50,6 @@ export async function followRun(actor: Actor, runId: string): Promise<ReadableSt
 				open = false;
 				clearInterval(looks);
 				stopListening();
-				leave = () => {};
 			};
 			tell(now);
 		},
