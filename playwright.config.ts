@@ -11,8 +11,9 @@ export default defineConfig({
 	fullyParallel: false,
 	retries: 0,
 	forbidOnly: true,
-	timeout: 90_000,
-	expect: { timeout: 15_000 },
+	// Generous: a software rasteriser on two cores is slow, and a busy machine slower.
+	timeout: 240_000,
+	expect: { timeout: 30_000 },
 	reporter: process.env.PLAYWRIGHT_JSON_OUTPUT_NAME ? [['line'], ['json']] : [['list']],
 	use: {
 		baseURL: `http://127.0.0.1:${port}`,
@@ -38,7 +39,8 @@ export default defineConfig({
 	webServer: {
 		command: 'node scripts/serve-for-tests.mjs',
 		url: `http://127.0.0.1:${port}/healthz`,
-		env: { E2E_PORT: String(port) },
+		// The server ends with this process, however that ends.
+		env: { E2E_PORT: String(port), E2E_OWNER: String(process.pid) },
 		timeout: 240_000,
 		reuseExistingServer: !process.env.CI && !process.env.PLAYWRIGHT_JSON_OUTPUT_NAME,
 		gracefulShutdown: { signal: 'SIGTERM', timeout: 30_000 },

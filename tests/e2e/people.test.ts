@@ -2,6 +2,7 @@ import AxeBuilder from '@axe-core/playwright';
 import { expect, test } from '@playwright/test';
 import { expectHidden, expectProblem } from './helpers/refused';
 import { signIn } from './helpers/sign-in';
+import { demoPassword } from '../../scripts/lib/settings.mjs';
 
 const password = 'frost on the low glass';
 let count = 0;
@@ -38,6 +39,7 @@ test('somebody signs up, signs out, forgets the password and comes back by the l
 	await expect(page).toHaveURL(/\/sign-in\?next=%2Fprojects/);
 
 	await page.getByRole('link', { name: 'Set a new password' }).click();
+	await expect(page.getByRole('heading', { name: 'Set a new password' })).toBeVisible();
 	await page.getByLabel('E-mail').fill(email);
 	await page.getByRole('button', { name: 'Send the link' }).click();
 	await expect(page.getByText('Look into your mail')).toBeVisible();
@@ -92,7 +94,7 @@ test('signing in leads back to the page that was asked for, and only to this sit
 	await page.goto('/projects?sort=name');
 	await expect(page).toHaveURL(/\/sign-in\?next=/);
 	await page.getByLabel('E-mail').fill('designer@tiltyard.test');
-	await page.getByLabel('Password').fill('tiltyard-demo');
+	await page.getByLabel('Password').fill(demoPassword);
 	await page.getByRole('button', { name: 'Sign in' }).click();
 	await expect(page).toHaveURL(/\/projects\?sort=name/);
 	for (const astray of ['https://example.org/', '//example.org', '/\\example.org', '/\t/example.org']) {
@@ -262,7 +264,7 @@ test('signing in works by keyboard alone, on a phone, and without JavaScript', a
 	await page.getByLabel('E-mail').focus();
 	await page.keyboard.type('crew@tiltyard.test');
 	await page.keyboard.press('Tab');
-	await page.keyboard.type('tiltyard-demo');
+	await page.keyboard.type(demoPassword);
 	await page.keyboard.press('Tab');
 	await expect(page.getByRole('button', { name: 'Sign in' })).toBeFocused();
 	await page.keyboard.press('Enter');
