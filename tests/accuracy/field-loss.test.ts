@@ -1,6 +1,8 @@
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { readFileSync } from 'node:fs';
 import { fieldLoss } from '../../src/lib/core';
+
+vi.setConfig({ testTimeout: 60000 });
 
 interface LossCase {
 	latitudeDeg: number;

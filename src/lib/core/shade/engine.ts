@@ -245,7 +245,11 @@ export class ShadeEngine {
 		const reachX = ex + this.widest;
 		const reachY = ey + this.highest;
 		const { order, xs, ys } = grid;
-		const rows = grid.ask(x, y, ex, ey);
+		grid.box[0] = x;
+		grid.box[1] = y;
+		grid.box[2] = ex;
+		grid.box[3] = ey;
+		const rows = grid.ask();
 		for (let r = 0; r < rows; r++) {
 			const end = grid.to[r];
 			for (let k = grid.from[r]; k < end; k++) {

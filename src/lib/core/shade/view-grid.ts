@@ -9,6 +9,8 @@ export class ViewGrid {
 	/** Where the points of `order` stand in the view. */
 	xs = new Float64Array(0);
 	ys = new Float64Array(0);
+	/** Middle x, y and half sizes of the box that the next question is about. */
+	readonly box = new Float64Array(4);
 	/** Runs of `order` that the last question found. */
 	readonly from = new Int32Array(64);
 	readonly to = new Int32Array(64);
@@ -106,17 +108,21 @@ export class ViewGrid {
 		return r < 0 ? 0 : r >= this.rows ? this.rows - 1 : r;
 	}
 
-	/** Runs of points whose outlines may overlap a box of half size ex x ey about (x, y); returns their number. */
-	ask(x: number, y: number, ex: number, ey: number): number {
+	/**
+	 * Runs of points whose outlines may overlap the box asked for in `box`; returns their number. The box comes in an
+	 * array because numbers handed over one by one would be boxed millions of times.
+	 */
+	ask(): number {
 		if (this.columns === 0) {
 			this.from[0] = 0;
 			this.to[0] = this.whole;
 			return 1;
 		}
-		const left = this.column(x - ex - this.reachX);
-		const right = this.column(x + ex + this.reachX);
-		let bottom = this.row(y - ey - this.reachY);
-		const top = this.row(y + ey + this.reachY);
+		const box = this.box;
+		const left = this.column(box[0] - box[2] - this.reachX);
+		const right = this.column(box[0] + box[2] + this.reachX);
+		let bottom = this.row(box[1] - box[3] - this.reachY);
+		const top = this.row(box[1] + box[3] + this.reachY);
 		// A box far larger than the cells would need more runs than are kept: one long run is as safe.
 		if (top - bottom >= 63) {
 			this.from[0] = 0;

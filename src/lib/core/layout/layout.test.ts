@@ -1,0 +1,203 @@
+import { describe, expect, it } from 'vitest';
+import type { BoundaryPart, PlanPoint } from '../document';
+import { reachRadiusM } from '../machine/reach';
+import { testLayout, testModel, testPlot, testTracker } from '../test-field';
+import { checkLayout } from './check-layout';
+import { fillPlot } from './fill-plot';
+import { groundCover } from './ground-cover';
+import {
+	boundaryAreaM2,
+	boundaryEdges,
+	boundaryPerimeterM,
+	insideBoundary,
+	segmentDistanceM
+} from './polygon';
+import { rowPoints } from './rows';
+import { nextTags, rowLetters } from './tags';
+
+const square = (size: number, holes: PlanPoint[][] = []): BoundaryPart[] => [
+	{
+		outer: [
+			[0, 0],
+			[size, 0],
+			[size, size],
+			[0, size]
+		],
+		holes
+	}
+];
+const pond: PlanPoint[] = [
+	[40, 40],
+	[40, 60],
+	[60, 60],
+	[60, 40]
+];
+
+describe('filling a plot', () => {
+	const model = testModel();
+	const reach = reachRadiusM(model);
+	const grid = { model, pitchEastWestM: 10, pitchNorthSouthM: 9 };
+
+	it('holds exactly what fits a square: the phase is chosen to hold the most', () => {
+		// Free strip is 100 - 2 x 3.606 = 92.79 m: 10 columns at 10 m, 11 rows at 9 m.
+		expect(fillPlot({ plot: testPlot({ boundary: square(100) }), ...grid })).toHaveLength(110);
+	});
+
+	it('keeps every reach circle inside, off holes and off obstacles, whatever the turn and stagger', () => {
+		const plot = testPlot({
+			boundary: square(120, [pond]),
+			setBackM: 2,
+			obstacles: [
+				{
+					id: 'b',
+					kind: 'box',
+					name: 'Barn',
+					eastM: 90,
+					northM: 90,
+					sizeXM: 12,
+					sizeYM: 8,
+					heightM: 5,
+					turnDeg: 30
+				}
+			]
+		});
+		for (const turnDeg of [0, 13, 90, 200]) {
+			const points = fillPlot({ plot, ...grid, turnDeg, stagger: 0.5 });
+			expect(points.length).toBeGreaterThan(60);
+			for (const [x, y] of points) {
+				expect(insideBoundary(plot.boundary, x, y)).toBe(true);
+				for (const edge of boundaryEdges(plot.boundary)) {
+					expect(segmentDistanceM(x, y, edge)).toBeGreaterThan(reach + 2 - 1e-6);
+				}
+				expect(Math.hypot(x - 90, y - 90)).toBeGreaterThan(reach + 4);
+			}
+			const layout = testLayout(points.map(([e, n], k) => testTracker(k, e, n)));
+			expect(checkLayout(plot, layout).filter((f) => f.kind !== 'low-corner')).toEqual([]);
+		}
+	});
+
+	it('goes by rows from the north, each from the west, and shifts every second row', () => {
+		const points = fillPlot({ plot: testPlot({ boundary: square(60) }), ...grid, stagger: 0.5 });
+		const rows = [...new Set(points.map((p) => p[1]))];
+		expect(rows).toEqual([...rows].sort((a, b) => b - a));
+		const first = points.filter((p) => p[1] === rows[0])[0][0];
+		const second = points.filter((p) => p[1] === rows[1])[0][0];
+		expect(Math.abs(first - second)).toBeCloseTo(5, 9);
+	});
+
+	it('turns the grid clockwise', () => {
+		const points = fillPlot({ plot: testPlot({ boundary: square(100) }), ...grid, turnDeg: 20 });
+		const [a, b] = points.slice(3);
+		// A row that ran east now runs 20 degrees south of east.
+		expect((Math.atan2(b[1] - a[1], b[0] - a[0]) * 180) / Math.PI).toBeCloseTo(-20, 6);
+	});
+
+	it('is empty without a boundary or with a pitch of nothing, and obeys a limit', () => {
+		expect(fillPlot({ plot: testPlot(), ...grid })).toEqual([]);
+		expect(fillPlot({ plot: testPlot({ boundary: square(100) }), ...grid, pitchEastWestM: 0 })).toEqual([]);
+		expect(fillPlot({ plot: testPlot({ boundary: square(100) }), ...grid, limit: 7 })).toHaveLength(7);
+	});
+});
+
+describe('rows and tags', () => {
+	it('spaces a row by pitch or by count', () => {
+		expect(rowPoints([0, 0], [0, 30], { pitchM: 10 })).toEqual([
+			[0, 0],
+			[0, 10],
+			[0, 20],
+			[0, 30]
+		]);
+		expect(rowPoints([0, 0], [9, 0], { count: 4 })).toEqual([
+			[0, 0],
+			[3, 0],
+			[6, 0],
+			[9, 0]
+		]);
+	});
+
+	it('letters rows from the north and numbers from the west, after the letters in use', () => {
+		const points: PlanPoint[] = [
+			[20, 0],
+			[0, 10],
+			[10, 10.4],
+			[10, 0]
+		];
+		expect(nextTags([], points)).toEqual(['B02', 'A01', 'A02', 'B01']);
+		expect(nextTags(['C07', 'gate'], points)).toEqual(['E02', 'D01', 'D02', 'E01']);
+		expect([0, 25, 26, 51, 52, 701, 702].map(rowLetters)).toEqual(['A', 'Z', 'AA', 'AZ', 'BA', 'ZZ', 'AAA']);
+	});
+});
+
+describe('checking a layout', () => {
+	it('says who overlaps and by how much', () => {
+		const layout = testLayout([testTracker(0, 0, 0), testTracker(1, 7, 0), testTracker(2, 30, 0)]);
+		const overlap = checkLayout(testPlot({ boundary: [] }), layout).filter(
+			(f) => f.kind === 'circles-overlap'
+		);
+		expect(overlap).toHaveLength(1);
+		// Two circles of 3.606 m, 7 m apart.
+		expect(overlap[0].message).toBe('A01 and A02: reach circles overlap by 0.21 m.');
+	});
+
+	it('finds set-backs broken at the fence and at a hole, and trackers outside', () => {
+		const plot = testPlot({ boundary: square(100, [pond]), setBackM: 3 });
+		const layout = testLayout([
+			testTracker(0, 5, 50),
+			testTracker(1, 50, 34),
+			testTracker(2, 50, 50),
+			testTracker(3, 20, 20),
+			testTracker(4, 130, 20)
+		]);
+		const found = checkLayout(plot, layout).map((f) => [f.kind, f.trackerIds[0]]);
+		expect(found).toEqual([
+			['set-back', 't0'],
+			['set-back', 't1'],
+			['outside', 't2'],
+			['outside', 't4']
+		]);
+	});
+
+	it('finds tags used twice, low corners and a missing boundary', () => {
+		const low = testModel({ axisHeightM: 2.2 });
+		const layout = testLayout([testTracker(0, 0, 0), testTracker(1, 20, 0, { tag: 'A01' })], [low]);
+		expect(checkLayout(testPlot(), layout).map((f) => f.kind)).toEqual([
+			'double-tag',
+			'no-boundary',
+			'low-corner'
+		]);
+	});
+
+	it('agrees with asking every pair and every edge', () => {
+		const trackers = Array.from({ length: 400 }, (_, k) =>
+			testTracker(k, (k * 37.7) % 140, (k * 53.3) % 131, { tag: `X${k}` })
+		);
+		const plot = testPlot({ boundary: square(135, [pond]), setBackM: 1 });
+		const reach = reachRadiusM(testModel());
+		let pairs = 0;
+		trackers.forEach((a, i) =>
+			trackers.slice(i + 1).forEach((b) => {
+				if (Math.hypot(a.eastM - b.eastM, a.northM - b.northM) < 2 * reach - 0.001) pairs++;
+			})
+		);
+		const near = trackers.filter(
+			(t) =>
+				insideBoundary(plot.boundary, t.eastM, t.northM) &&
+				boundaryEdges(plot.boundary).some((e) => segmentDistanceM(t.eastM, t.northM, e) < reach + 1 - 0.001)
+		).length;
+		const found = checkLayout(plot, testLayout(trackers));
+		expect(pairs).toBeGreaterThan(10);
+		expect(found.filter((f) => f.kind === 'circles-overlap')).toHaveLength(pairs);
+		expect(found.filter((f) => f.kind === 'set-back')).toHaveLength(near);
+	});
+});
+
+describe('areas', () => {
+	it('takes holes out of the land, and the slot out of the glass', () => {
+		const boundary = square(100, [pond]);
+		expect(boundaryAreaM2(boundary)).toBe(9600);
+		expect(boundaryPerimeterM(boundary)).toBe(480);
+		const layout = testLayout([testTracker(0, 10, 10)], [testModel({ centreGapM: 1 })]);
+		expect(groundCover(testPlot({ boundary }), layout)).toBeCloseTo(20 / 9600, 12);
+		expect(groundCover(testPlot(), layout)).toBeNull();
+	});
+});
