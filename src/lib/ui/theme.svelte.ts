@@ -23,8 +23,16 @@ export class Theme {
 		const device = matchMedia('(prefers-color-scheme: dark)');
 		const follow = () => this.#apply(device.matches);
 		follow();
+		// Paper is white: a dark page prints in the light colours.
+		const onPaper = () => (document.documentElement.dataset.theme = 'light');
 		device.addEventListener('change', follow);
-		return () => device.removeEventListener('change', follow);
+		window.addEventListener('beforeprint', onPaper);
+		window.addEventListener('afterprint', follow);
+		return () => {
+			device.removeEventListener('change', follow);
+			window.removeEventListener('beforeprint', onPaper);
+			window.removeEventListener('afterprint', follow);
+		};
 	}
 
 	choose(choice: ThemeChoice): void {
