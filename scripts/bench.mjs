@@ -1,4 +1,4 @@
-// Speed of the computing core: seeded fields, medians, one JSON object on the last line.
+// Speed of the computing core: seeded fields, mean processor time, one JSON object on the last line.
 // The last run is kept in .data/bench.json and each figure is shown beside it.
 import { mkdir, readFile, writeFile } from 'node:fs/promises';
 import { fileURLToPath, pathToFileURL } from 'node:url';

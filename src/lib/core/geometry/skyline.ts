@@ -9,7 +9,11 @@ export interface PreparedSkyline {
 
 export function prepareSkyline(points: readonly SkylinePoint[]): PreparedSkyline {
 	const sorted = points
-		.map((p) => ({ azimuth: normaliseDeg(p.azimuthDeg), elevation: p.elevationDeg }))
+		// A list that closes itself at 360 keeps that end apart from its beginning at 0.
+		.map((p) => ({
+			azimuth: p.azimuthDeg === 360 ? 360 : normaliseDeg(p.azimuthDeg),
+			elevation: p.elevationDeg
+		}))
 		.sort((a, b) => a.azimuth - b.azimuth);
 	return {
 		azimuths: Float64Array.from(sorted, (p) => p.azimuth),

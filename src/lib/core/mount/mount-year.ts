@@ -2,7 +2,7 @@ import { sunVector } from '../conventions';
 import type { Mount, MountEdge } from '../document';
 import { fieldSunHidden, LIT_UNDER_CROWN, prepareField, type Field } from '../field';
 import type { MountClass, MountPlaceResult, MountResult, RunInput, TrackerMounts } from '../results';
-import { SunSky, type SunStep } from '../run/sun-steps';
+import { assertStep, SunSky, type SunStep } from '../run/sun-steps';
 import type { ShadeEngine } from '../shade/engine';
 import { insideConvex } from '../shade/pieces';
 import { CORE_VERSION } from '../version';
@@ -150,6 +150,7 @@ export function mountYear(
 	options: MountOptions = {},
 	onProgress?: (done01: number) => boolean
 ): MountResult | null {
+	assertStep(input.stepMinutes);
 	const field = prepareField(input);
 	const { engine, models } = field;
 	const chosen = {

@@ -1,7 +1,7 @@
 import type { DayShade } from '../results';
 import { fieldSunHidden, type Field } from '../field';
 import { dayStartMs, sunDay } from '../sun/day';
-import { SunSky } from './sun-steps';
+import { assertStep, SunSky } from './sun-steps';
 
 const DAY_MS = 86400000;
 /** Shade of less than this share of a table is no shade to the winter rule: a sliver that nobody can see. */
@@ -20,6 +20,7 @@ export function dayShade(
 	stepMinutes: number,
 	utcOffsetMinutes: number
 ): DayShade {
+	assertStep(stepMinutes);
 	const { engine, place } = field;
 	const sky = new SunSky(place);
 	const stepMs = stepMinutes * 60000;

@@ -4,6 +4,7 @@ import { centreOffset } from '../machine/pose';
 import type { TrackerModel } from '../document';
 import { ShadeEngine } from '../shade/engine';
 import { insideConvex } from '../shade/pieces';
+import { assertStep } from './sun-steps';
 import { tableGroup } from '../field';
 import { positionFromPlace } from '../sun/position';
 import { SunSeries } from '../sun/series';
@@ -72,6 +73,7 @@ function wholeModel(model: FieldLossRequest['model']): TrackerModel {
  * and beam `meinel` it is the plain textbook sum: steps at mid-interval, airless elevation above 0, 1361 W/m².
  */
 export function fieldLoss(request: FieldLossRequest): FieldLossResult {
+	assertStep(request.stepMinutes);
 	const model = wholeModel(request.model);
 	const { trackers } = request;
 	const group = tableGroup(model, { kind: 'following' });

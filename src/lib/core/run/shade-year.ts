@@ -4,7 +4,7 @@ import { BEAM_MODEL } from '../energy/beam';
 import { shortestDate } from '../sun/day';
 import { CORE_VERSION } from '../version';
 import { dayShade } from './day-shade';
-import { SunSky } from './sun-steps';
+import { assertStep, SunSky } from './sun-steps';
 import { winterVerdict } from './winter';
 
 /** How the sun is named in results. */
@@ -65,6 +65,7 @@ function binLosses(without: Float64Array, lit: Float64Array) {
  * is null. 100 alike trackers at 10 minutes take a fraction of a second.
  */
 export function shadeYear(input: RunInput, onProgress?: (done01: number) => boolean): ShadeResult | null {
+	assertStep(input.stepMinutes);
 	const field = prepareField(input);
 	const { engine } = field;
 	const count = engine.count;
@@ -141,6 +142,10 @@ export function shadeYear(input: RunInput, onProgress?: (done01: number) => bool
 			meetsWinterRule: !breakers.has(tracker.id)
 		};
 	});
+	// Kept with the result for pictures: the verdict is made from the full digits, which would only make it long.
+	shortestDay.shares = shortestDay.shares.map((shares) =>
+		shares.map((share) => Math.round(share * 1e5) / 1e5)
+	);
 	const whole = binLosses(fieldWithout, fieldLit);
 	let worst: TrackerShade | null = null;
 	for (const tracker of trackers) if (worst === null || tracker.beamLoss > worst.beamLoss) worst = tracker;

@@ -3,6 +3,12 @@ import { positionFromPlace } from '../sun/position';
 import { SunSeries } from '../sun/series';
 import { clearBeam, SOLAR_CONSTANT } from '../energy/beam';
 
+/** Throws on a step that no run can be made of: it would never end. Callers check what people type. */
+export function assertStep(stepMinutes: number): void {
+	if (!(stepMinutes >= 0.1 && stepMinutes <= 60))
+		throw new Error(`A step of ${stepMinutes} minutes is not possible`);
+}
+
 /** One step of a run with the sun above the horizon. */
 export interface SunStep {
 	/** Middle of the interval, UTC milliseconds. */
