@@ -91,13 +91,19 @@ function paint(doc: Doc, stroke?: Stroke, fill?: Fill): void {
 
 function drawText(doc: Doc, mark: TextMark): void {
 	const sizePt = pt(mark.capMm / CAP_HEIGHT_PER_EM);
-	// Tabular figures, so that columns of numbers stand under each other. Only the latin file holds them.
-	const runs = fontRuns(mark.text).map((run) => {
+	const parts = fontRuns(mark.text);
+	// Measuring lays the line out once more: only where the place depends on it.
+	const measured = mark.anchor !== 'start' || parts.length > 1;
+	const runs = parts.map((run) => {
 		const name = `manrope-${run.subset}-${mark.weight}`;
 		doc.registerFont(name, sheetFont(run.subset, mark.weight).bytes);
-		const features: PDFKit.Mixins.OpenTypeFeatures[] = run.subset === 'latin' ? ['tnum'] : [];
-		const widthPt = doc.font(name).fontSize(sizePt).widthOfString(run.text, { features });
-		return { name, text: run.text, features, widthPt };
+		// Tabular figures, so that columns of numbers stand under each other; only the latin file holds them.
+		// A line without figures goes without, since the writer keeps such lines' words.
+		const features: PDFKit.Mixins.OpenTypeFeatures[] =
+			run.subset === 'latin' && /\d/.test(run.text) ? ['tnum'] : [];
+		const options = features.length > 0 ? { features } : {};
+		const widthPt = measured ? doc.font(name).fontSize(sizePt).widthOfString(run.text, options) : 0;
+		return { name, text: run.text, options, widthPt };
 	});
 	const totalPt = runs.reduce((sum, run) => sum + run.widthPt, 0);
 	const share = mark.anchor === 'start' ? 0 : mark.anchor === 'middle' ? 0.5 : 1;
@@ -107,7 +113,7 @@ function drawText(doc: Doc, mark: TextMark): void {
 	let at = x - totalPt * share;
 	for (const run of runs) {
 		doc.font(run.name).fontSize(sizePt);
-		doc.text(run.text, at, y, { lineBreak: false, baseline: 'alphabetic', features: run.features });
+		doc.text(run.text, at, y, { lineBreak: false, baseline: 'alphabetic', ...run.options });
 		at += run.widthPt;
 	}
 	if (mark.turnDeg) doc.restore();
