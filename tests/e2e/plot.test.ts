@@ -1,8 +1,10 @@
-import { readFileSync } from 'node:fs';
 import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from '@playwright/test';
 import type { Plot } from '../../src/lib/core/document';
 import { signIn } from './helpers/sign-in';
+
+// Many small steps each; a busy machine takes its time over them.
+test.describe.configure({ timeout: 240_000 });
 
 const boundaryFile = 'tests/fixtures/invented-boundary.geojson';
 const skylineFile = 'tests/fixtures/invented-skyline.csv';
@@ -55,7 +57,7 @@ test('a boundary and a skyline come from files, are looked at first, and are the
 	await expect(page.getByRole('heading', { name: 'Begin with the land' })).toBeVisible();
 	await upload(page, boundaryFile);
 	const preview = page.getByTestId('boundary-preview');
-	await expect(preview).toContainText(/ha, \d+\sm east–west by \d+\sm north–south, 30 corners/);
+	await expect(preview).toContainText(/m², \d+\sm east–west by \d+\sm north–south, 30 corners/);
 	await expect(preview).toContainText('1 hole is kept');
 	// Nothing has changed before it is accepted.
 	expect((await storedPlot(page, projectId)).boundary).toEqual([]);
