@@ -14,7 +14,7 @@ import { asAppError, errorOfStatus, problemResponse } from '$lib/server/errors';
 import { refuseLongBody } from '$lib/server/http/body-limit';
 import { secure } from '$lib/server/http/headers';
 import { newRequestId } from '$lib/server/http/request-id';
-import { startJobs } from '$lib/server/jobs';
+import { startJobs, stopJobs } from '$lib/server/jobs';
 import { logger } from '$lib/server/log';
 import { startMail } from '$lib/server/mail';
 
@@ -22,15 +22,18 @@ export const init: ServerInit = async () => {
 	await startMail();
 	startJobs();
 	if (seedsDemo()) await seedDemo();
-	// The server has let go of its connections: let go of the database too, so that the process can end.
+	// The server has let go of its connections: give back the runs in work, then let go of the database too, so that
+	// the process can end.
 	process.once('sveltekit:shutdown', () => {
-		closeDatabase().then(
-			() => process.exit(0),
-			(reason: unknown) => {
-				logger.error({ error: reason }, 'the database connections did not close');
-				process.exit(1);
-			}
-		);
+		stopJobs()
+			.then(closeDatabase)
+			.then(
+				() => process.exit(0),
+				(reason: unknown) => {
+					logger.error({ error: reason }, 'the server did not end as it should');
+					process.exit(1);
+				}
+			);
 	});
 };
 

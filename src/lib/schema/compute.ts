@@ -208,9 +208,7 @@ export const fieldLossRequestSchema = z
 		year: wholeNumber(1950, 2100),
 		stepMinutes: wholeNumber(1, 20).default(10),
 		refraction: z.boolean({ error: 'Give true or false.' }).default(true),
-		beam: z
-			.enum(['meinel', 'clear'], { error: 'Give the beam as "meinel" or "clear".' })
-			.default('clear'),
+		beam: z.enum(['meinel', 'clear'], { error: 'Give the beam as "meinel" or "clear".' }).default('clear'),
 		altitudeM: quantity(-450, 6500, 'm above sea level').default(0),
 		model: z.object({ widthM, heightM, ...z.object(otherMechanics).partial().shape }),
 		trackers: z

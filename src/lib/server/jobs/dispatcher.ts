@@ -23,7 +23,6 @@ export function startJobs(): void {
 	const timer = setInterval(wakeJobs, LOOK_EVERY_MS);
 	timer.unref();
 	holder.tiltyardDispatcher = { working: new Map(), looking: null, again: false, closing: false, timer };
-	process.once('sveltekit:shutdown', () => void stopJobs());
 	computePool();
 	wakeJobs();
 }
