@@ -26,16 +26,16 @@ const checks = JSON.parse(
 describe('sun position against the reference positions (astropy, astronomy-engine and the NREL code agree on them)', () => {
 	it('has positions to compare', () => expect(checks.positions.length).toBeGreaterThan(10));
 	for (const check of checks.positions) {
-		it(`${check.id}: within 0.003 degrees of arc, with and without air`, () => {
+		it(`${check.id}: within 0.001 degrees of arc, with and without air`, () => {
 			const sun = sunPosition(Date.parse(check.time), check.latitudeDeg, check.longitudeDeg);
 			const { azimuthDeg, elevationDeg, apparentElevationDeg } = check.expected;
-			expect(arcDeg(sun, { azimuthDeg, elevationDeg })).toBeLessThan(0.003);
+			expect(arcDeg(sun, { azimuthDeg, elevationDeg })).toBeLessThan(0.001);
 			expect(
 				arcDeg(
 					{ azimuthDeg: sun.azimuthDeg, elevationDeg: sun.apparentElevationDeg },
 					{ azimuthDeg, elevationDeg: apparentElevationDeg }
 				)
-			).toBeLessThan(0.003);
+			).toBeLessThan(0.001);
 		});
 	}
 });

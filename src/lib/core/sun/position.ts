@@ -48,7 +48,7 @@ export function positionFromPlace(place: SunPlace, latitudeDeg: number, longitud
 
 /**
  * Where the sun stands at a UTC time in milliseconds, seen from a place (degrees, north and east positive). Held
- * within 0.003 degrees of arc of the reference positions of the tests; height above the sea changes nothing at
+ * within 0.001 degrees of arc of the reference positions of the tests; height above the sea changes nothing at
  * this accuracy. Never NaN: at the poles and at the zenith the azimuth is merely one of many.
  */
 export function sunPosition(timeMs: number, latitudeDeg: number, longitudeDeg: number): SunPosition {
