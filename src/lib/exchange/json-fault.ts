@@ -4,6 +4,7 @@
  */
 export function jsonFaultOffset(text: string): number {
 	const token =
+		// eslint-disable-next-line no-control-regex -- JSON forbids raw control characters in strings (RFC 8259, section 7)
 		/[ \t\r\n]*(?:([{}[\],:])|("(?:[^"\\\u0000-\u001f]|\\(?:["\\/bfnrt]|u[0-9a-fA-F]{4}))*")|(-?(?:0|[1-9]\d*)(?:\.\d+)?(?:[eE][+-]?\d+)?|true|false|null)(?![A-Za-z0-9_.]))/y;
 	const blank = /[ \t\r\n]*/y;
 	const open: string[] = [];
