@@ -40,10 +40,8 @@ async function readText(request: Request, maxBytes: number): Promise<string> {
 			const { done, value } = await reader.read();
 			if (done) return text + decoder.decode();
 			bytes += value.byteLength;
-			if (bytes > maxBytes) {
-				await reader.cancel();
-				throw tooLarge(maxBytes);
-			}
+			// Left unread and not cancelled: that would cut the line before the answer is out.
+			if (bytes > maxBytes) throw tooLarge(maxBytes);
 			text += decoder.decode(value, { stream: true });
 		}
 	} catch (error) {
