@@ -211,7 +211,12 @@ test('the table does by keyboard what the plan does by pointer, and the page has
 			async () => (await storedLayout(page, field.layoutId)).trackers.find((t) => t.tag === 'B03')?.northM
 		)
 		.toBe(-12.5);
-	await page.getByLabel('Select B03').check();
+	await page.getByRole('button', { name: 'Add a tracker' }).click();
+	await expect(page.getByLabel('North of B04')).toHaveValue('-12.50');
+	await page.getByRole('button', { name: 'Renumber all' }).click();
+	await page.getByRole('button', { name: 'Undo: Renumber all' }).click();
+	await page.getByRole('checkbox', { name: 'Select B04' }).uncheck();
+	await page.getByRole('checkbox', { name: 'Select B03' }).check();
 	await expect(page.getByRole('heading', { name: 'B03' })).toBeVisible();
 	expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
 	await page.getByRole('button', { name: 'Plan', exact: true }).click();
