@@ -1,5 +1,5 @@
 import type { PaperRect } from './drawing';
-import { Pen } from './pen';
+import type { Pen } from './pen';
 import { sheetColours as c } from './sheet-colours';
 import { cutToWidth } from './text-fit';
 

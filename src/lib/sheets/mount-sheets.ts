@@ -9,7 +9,7 @@ import { millimetres, mountDimensions, type MountDimensions } from './mount-word
 import type { Pen } from './pen';
 import type { PlanContent } from './plan-content';
 import { drawStops } from './stops-picture';
-import { framedSheet, footStrip, upperSpace } from './sheet-frame';
+import { framedSheet, footStrip } from './sheet-frame';
 import { sheetColours as c } from './sheet-colours';
 import type { SheetBuilder } from './site-sheets';
 
@@ -182,7 +182,8 @@ function drawSide(pen: Pen, mount: Mount | null, model: TrackerModel): void {
 	const x = 242;
 	const y = 30;
 	pen.text('words', [x, y], 'Side view of the edge', { capMm: 2.6, weight: 800 });
-	pen.text('words', [x, y + 4], 'not to scale, figures rule', { colour: c.inkSoft });
+	const note = mount ? 'not to scale, figures rule' : 'drawn once a mount is chosen';
+	pen.text('words', [x, y + 4], note, { colour: c.inkSoft });
 	if (!mount) return;
 	const glassX = x + 26;
 	const edgeY = y + 40;

@@ -51,7 +51,7 @@ function drawTitleBlock(
 	facts: { name: string; documentType: string; scale: string | null }
 ): void {
 	const { heading } = content;
-	const { xMm: x, yMm: y, widthMm: w, heightMm: h } = titleBlock;
+	const { xMm: x, yMm: y } = titleBlock;
 	pen.rect('frame', titleBlock, { fill: { colour: c.white }, stroke: { colour: c.ink, widthMm: 0.5 } });
 	const draft = heading.issued === null;
 	const cell = (left: number, row: number, width: number, label: string, value: string, bold = false) => {
