@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { idSchema, quantity, wholeNumber } from './quantity';
+import { quantity, wholeNumber } from './quantity';
 import { trackerModelShape } from './tracker-model';
 
 /** Shapes of the stateless calculations. Unknown fields are passed over, so that a scene may carry its own notes. */
@@ -8,6 +8,12 @@ export const MAX_SCENE_TABLES = 2_000;
 export const MAX_SCENE_OBSTACLES = 500;
 export const MAX_FIELD_LOSS_TRACKERS = 2_000;
 export const MAX_SUN_TIMES = 100_000;
+
+/** Whatever the caller names things by. */
+const idSchema = z
+	.string({ error: 'Give an id as text.' })
+	.min(1, { error: 'Give an id.' })
+	.max(64, { error: 'Keep an id within 64 characters.' });
 
 const azimuthDeg = quantity(-360, 720, 'degrees clockwise from true north');
 const latitudeDeg = quantity(-90, 90, 'degrees, north positive');

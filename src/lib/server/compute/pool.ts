@@ -1,5 +1,5 @@
 import { createHash } from 'node:crypto';
-import { mkdtempSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { availableParallelism, tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Piscina } from 'piscina';
@@ -17,6 +17,7 @@ const MAX_WAITING = 64;
 
 interface RunningPool {
 	pool: Piscina;
+	filename: string;
 	sourceHash: string;
 }
 
@@ -26,7 +27,9 @@ const holder = globalThis as typeof globalThis & { tiltyardPool?: RunningPool };
 /** The pool of worker threads, started at first use. */
 export function computePool(): Piscina {
 	const sourceHash = createHash('sha256').update(workerSource).digest('hex');
-	if (holder.tiltyardPool && holder.tiltyardPool.sourceHash !== sourceHash) void stopPool();
+	const running = holder.tiltyardPool;
+	// The source changes under development; the file goes when somebody tidies the temporary folder.
+	if (running && (running.sourceHash !== sourceHash || !existsSync(running.filename))) void stopPool();
 	if (!holder.tiltyardPool) {
 		const folder = mkdtempSync(join(tmpdir(), 'tiltyard-worker-'));
 		const filename = join(folder, 'worker.mjs');
@@ -41,7 +44,7 @@ export function computePool(): Piscina {
 		pool.on('error', (error: unknown) => logger.error({ error }, 'a worker thread ended'));
 		// Kept until the process ends: a thread that is just starting still reads it.
 		process.once('exit', () => rmSync(folder, { recursive: true, force: true }));
-		holder.tiltyardPool = { pool, sourceHash };
+		holder.tiltyardPool = { pool, filename, sourceHash };
 	}
 	return holder.tiltyardPool.pool;
 }
