@@ -39,8 +39,7 @@ export function splitTable(text: string, wanted: string): ({ ok: true } & Table)
 		line,
 		cells: trimTail(content.split(separator).map((cell) => cell.trim()))
 	}));
-	const hasHeading =
-		rows.length > 0 && rows[0].cells.every((cell) => cell === '' || /\p{L}{3}/u.test(cell));
+	const hasHeading = rows.length > 0 && rows[0].cells.every((cell) => cell === '' || /\p{L}{3}/u.test(cell));
 	return { ok: true, heading: hasHeading ? rows[0].cells : null, rows: hasHeading ? rows.slice(1) : rows };
 }
 
