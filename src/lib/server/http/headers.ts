@@ -6,7 +6,7 @@ const always: Record<string, string> = {
 	'cross-origin-opener-policy': 'same-origin',
 	'cross-origin-resource-policy': 'same-origin',
 	'permissions-policy':
-		'camera=(), microphone=(), geolocation=(self), payment=(), usb=(), bluetooth=(), display-capture=()'
+		'camera=(), microphone=(), geolocation=(self), payment=(), usb=(), display-capture=()'
 };
 
 /** What is no page loads nothing and sits in no frame. */
