@@ -5,8 +5,7 @@ const always: Record<string, string> = {
 	'referrer-policy': 'same-origin',
 	'cross-origin-opener-policy': 'same-origin',
 	'cross-origin-resource-policy': 'same-origin',
-	'permissions-policy':
-		'camera=(), microphone=(), geolocation=(self), payment=(), usb=(), display-capture=()'
+	'permissions-policy': 'camera=(), microphone=(), geolocation=(self), payment=(), usb=(), display-capture=()'
 };
 
 /** What is no page loads nothing and sits in no frame. */
