@@ -83,7 +83,7 @@ test('settings change the facts, copy and rename a layout, and delete the projec
 	await expect(page.getByRole('button', { name: 'Rename Layout 1 copy' })).toBeVisible();
 	await page.getByRole('button', { name: 'Rename Layout 1 copy' }).click();
 	await page.getByLabel('Name of the layout').fill('Wide pitch');
-	await page.getByRole('button', { name: 'Rename layout' }).click();
+	await page.getByRole('button', { name: 'Rename layout', exact: true }).click();
 	await expect(page.getByRole('link', { name: 'Wide pitch' })).toBeVisible();
 	await page.getByRole('button', { name: 'Delete Layout 1' }).click();
 	await page.getByRole('button', { name: 'Delete layout', exact: true }).click();

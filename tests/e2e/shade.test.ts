@@ -79,7 +79,7 @@ test.describe('the shade page', () => {
 		await signIn(page, 'designer@tiltyard.test');
 		const { projectId } = await makeSmallField(page);
 		await page.goto(`/projects/${projectId}/shade`);
-		const year = page.getByLabel('Year');
+		const year = page.getByRole('textbox', { name: 'Year' });
 		await year.fill('19');
 		await year.press('Enter');
 		await expect(year).toHaveValue('19');
