@@ -1,6 +1,15 @@
 import { describe, expect, it } from 'vitest';
 import type { Place } from '$lib/core';
-import { bandDay, clockTicks, cutSpans, hoursPerTick, shareAt, solarTicks, topOfScaleDeg } from './day-band';
+import {
+	bandDay,
+	clockTicks,
+	cutSpans,
+	hoursPerTick,
+	shareAt,
+	skylineRuns,
+	solarTicks,
+	topOfScaleDeg
+} from './day-band';
 
 const place = (latitudeDeg: number, longitudeDeg: number, timeZone: string): Place => ({
 	latitudeDeg,
@@ -80,5 +89,19 @@ describe('the day band', () => {
 		expect(shareAt(day, 20)).toBe(0.4);
 		expect(shareAt(day, 9)).toBeNull();
 		expect(shareAt(day, 21)).toBeNull();
+	});
+
+	it('keeps the time behind the skyline apart from the shade of neighbours', () => {
+		const runs = skylineRuns({
+			timesMs: [0, 1, 2, 3, 4],
+			fieldShare: [1, 1, 0.4, 0.2, 1],
+			sunHidden: [true, true, false, false, true]
+		});
+		expect(runs.map((run) => [run.hidden, run.points.map((point) => point.timeMs)])).toEqual([
+			[true, [0, 1, 2]],
+			[false, [2, 3]],
+			[true, [3, 4]]
+		]);
+		expect(runs[1].points.map((point) => point.share)).toEqual([0.4, 0.2]);
 	});
 });

@@ -109,3 +109,29 @@ export function shareAt(day: { timesMs: number[]; fieldShare: number[] }, timeMs
 	const part = (timeMs - timesMs[after - 1]) / (timesMs[after] - timesMs[after - 1]);
 	return fieldShare[after - 1] + (fieldShare[after] - fieldShare[after - 1]) * part;
 }
+
+interface SkylineRun {
+	hidden: boolean;
+	points: { timeMs: number; share: number }[];
+}
+
+/** The day's times in runs, the sun in front of the skyline or behind it; a hidden run reaches to its neighbours. */
+export function skylineRuns(day: {
+	timesMs: number[];
+	fieldShare: number[];
+	sunHidden: boolean[];
+}): SkylineRun[] {
+	const runs: SkylineRun[] = [];
+	day.timesMs.forEach((timeMs, index) => {
+		const hidden = day.sunHidden[index];
+		const point = { timeMs, share: day.fieldShare[index] };
+		const last = runs.at(-1);
+		if (last && last.hidden === hidden) last.points.push(point);
+		else {
+			const before = last?.points.at(-1);
+			if (last?.hidden) last.points.push(point);
+			runs.push({ hidden, points: hidden && before ? [before, point] : [point] });
+		}
+	});
+	return runs;
+}
