@@ -7,6 +7,8 @@ export interface PendingCopy<T> {
 	/** The revision that was edited. */
 	baseRevision: number;
 	savedAtMs: number;
+	/** Earlier states that were sent on the same revision and whose answers never came: one of them may be stored by now. */
+	unanswered?: T[];
 }
 
 /** Keeps one document on this device until the server has acknowledged it. */

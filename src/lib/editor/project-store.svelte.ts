@@ -96,6 +96,11 @@ export class ProjectStore {
 		return worstFirst.find((state) => states.includes(state)) ?? 'saved';
 	}
 
+	/** Whether closing the page would lose nothing: all is saved, or kept on this device until it is. */
+	get safeToLeave(): boolean {
+		return this.#plotSync.kept && this.#layoutSync.kept;
+	}
+
 	/** Why something is not saved, as a sentence. */
 	get saveMessage(): string | null {
 		return this.#layoutSync.message ?? this.#plotSync.message;
@@ -256,7 +261,11 @@ export class ProjectStore {
 		const hidden = (): void => {
 			if (document.visibilityState === 'hidden') void this.saveNow();
 		};
+		const leaving = (event: BeforeUnloadEvent): void => {
+			if (!this.safeToLeave) event.preventDefault();
+		};
 		window.addEventListener('online', online);
+		window.addEventListener('beforeunload', leaving);
 		document.addEventListener('visibilitychange', hidden);
 		this.#preview = new PreviewClient(
 			(answer) => {
@@ -273,6 +282,7 @@ export class ProjectStore {
 		});
 		return () => {
 			window.removeEventListener('online', online);
+			window.removeEventListener('beforeunload', leaving);
 			document.removeEventListener('visibilitychange', hidden);
 			stopPreview();
 			this.#preview?.close();

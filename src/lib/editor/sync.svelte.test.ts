@@ -1,7 +1,7 @@
 import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import type { CopyStorage } from './pending-copy';
 import { DocumentSync } from './sync.svelte';
-import type { SaveOutcome, Stored, Transport } from './transport';
+import { httpTransport, type SaveOutcome, type Stored, type Transport } from './transport';
 
 interface Doc {
 	text: string;
@@ -215,5 +215,78 @@ describe('DocumentSync', () => {
 		expect(it.state).toBe('unsaved');
 		expect(it.message).toBe('trackers[0].tag: a tag is missing');
 		expect(storage.entries.size).toBe(1);
+	});
+
+	it('takes a lost answer for its own save even when the work went on meanwhile', async () => {
+		const server = new FakeServer();
+		server.loseAnswer = true;
+		const it = sync(server, memoryStorage());
+		it.changed({ text: 'a' });
+		await vi.advanceTimersByTimeAsync(700);
+		expect(server.stored.revision).toBe(2);
+		it.changed({ text: 'ab' });
+		await vi.advanceTimersByTimeAsync(2000);
+		expect(it.conflict).toBeNull();
+		expect(it.state).toBe('saved');
+		expect(server.stored).toEqual({ document: { text: 'ab' }, revision: 3 });
+	});
+
+	it('knows its own save again when the page is left between sending and answer', async () => {
+		const server = new FakeServer();
+		const storage = memoryStorage();
+		const before = sync(server, storage);
+		const honest = server.save.bind(server);
+		vi.spyOn(server, 'save').mockImplementationOnce(async (document, revision) => {
+			await honest(document, revision);
+			return new Promise<SaveOutcome>(() => undefined);
+		});
+		before.changed({ text: 'a' });
+		await vi.advanceTimersByTimeAsync(700);
+		before.changed({ text: 'ab' });
+		before.close();
+		const reloaded = sync(server, storage);
+		expect(reloaded.restore(server.stored.document)).toEqual({ text: 'ab' });
+		await vi.advanceTimersByTimeAsync(0);
+		expect(reloaded.conflict).toBeNull();
+		expect(server.stored).toEqual({ document: { text: 'ab' }, revision: 3 });
+		expect(storage.entries.size).toBe(0);
+	});
+
+	it('never claims to keep what the device has no room for', async () => {
+		const server = new FakeServer();
+		server.reachable = false;
+		const full: CopyStorage = {
+			...memoryStorage(),
+			setItem: () => {
+				throw new Error('QuotaExceededError');
+			}
+		};
+		const it = sync(server, full);
+		it.changed({ text: 'a' });
+		await vi.advanceTimersByTimeAsync(700);
+		expect(it.kept).toBe(false);
+		expect(it.message).toContain('keep this page open');
+		server.reachable = true;
+		it.online();
+		await vi.advanceTimersByTimeAsync(0);
+		expect(it.kept).toBe(true);
+		expect(it.message).toBeNull();
+	});
+});
+
+describe('saving over HTTP', () => {
+	const answering = (status: number, text: string, type: string) =>
+		httpTransport<Doc>(
+			'/documents/1',
+			async () => new Response(text, { status, headers: { 'content-type': type } })
+		);
+
+	it('takes an answer that is not the server\u2019s own for none, and tries again', async () => {
+		const portal = answering(200, '<html>Sign in to the network</html>', 'text/html');
+		expect((await portal.save({ text: 'a' }, 1)).kind).toBe('unreachable');
+		const broken = answering(502, '{"title":', 'application/json');
+		expect((await broken.save({ text: 'a' }, 1)).kind).toBe('unreachable');
+		const honest = answering(200, '{"revision":2}', 'application/json');
+		expect(await honest.save({ text: 'a' }, 1)).toEqual({ kind: 'saved', revision: 2 });
 	});
 });

@@ -21,8 +21,11 @@ interface SyncOptions<T> {
 	delayMs?: number;
 }
 
+const noRoom = 'This device has no room to keep a copy: keep this page open until it is saved.';
 const firstRetryMs = 1000;
 const longestRetryMs = 30_000;
+/** States without an answer that are remembered; only one of them can have been stored. */
+const mostUnanswered = 4;
 
 /**
  * Keeps one document and its stored revision in step: sends the newest state a moment after the last edit, keeps a copy on
@@ -34,7 +37,11 @@ export class DocumentSync<T> {
 	message = $state<string | null>(null);
 	conflict = $state.raw<Conflict<T> | null>(null);
 	revision = $state(0);
+	/** False while this device has no room for a copy: closing the page would then lose what is not saved. */
+	kept = $state(true);
 
+	/** States that were sent on this revision without an answer: the server may hold one of them. */
+	#unanswered: T[] = [];
 	#pending: T | null = null;
 	#busy = false;
 	#timer: ReturnType<typeof setTimeout> | null = null;
@@ -57,8 +64,8 @@ export class DocumentSync<T> {
 	/** The document was edited. */
 	changed(document: T): void {
 		this.#pending = document;
-		const kept = this.#keepCopy(document);
-		this.message = kept ? null : 'This device has no room to keep a copy: stay online until it is saved.';
+		this.#keepCopy(document);
+		this.message = this.kept ? null : noRoom;
 		if (this.conflict) {
 			this.conflict = { ...this.conflict, mine: document };
 			return;
@@ -79,7 +86,11 @@ export class DocumentSync<T> {
 			return null;
 		}
 		this.#pending = copy.document;
-		if (copy.baseRevision === this.revision) {
+		// The newer revision may be an earlier state of this very work, sent when the page was left.
+		const ours = copy.unanswered?.some((sent) => sameData(sent, current)) ?? false;
+		if (copy.baseRevision === this.revision || ours) {
+			if (ours) this.#keepCopy(copy.document);
+			else this.#unanswered = copy.unanswered ?? [];
 			this.state = 'unsaved';
 			this.#schedule(0);
 		} else {
@@ -145,7 +156,11 @@ export class DocumentSync<T> {
 	}
 
 	async #send(sending: T): Promise<void> {
+		if (!this.#unanswered.includes(sending)) {
+			this.#unanswered = [...this.#unanswered, sending].slice(-mostUnanswered);
+		}
 		const outcome = await this.#transport.save(sending, this.revision);
+		if (outcome.kind === 'refused') this.#unanswered = this.#unanswered.filter((sent) => sent !== sending);
 		if (outcome.kind === 'saved') this.#acknowledge(sending, outcome.revision);
 		else if (outcome.kind === 'stale') await this.#compare(sending);
 		else if (outcome.kind === 'unreachable') this.#retryLater(outcome.message);
@@ -157,6 +172,7 @@ export class DocumentSync<T> {
 
 	#acknowledge(sent: T, revision: number): void {
 		this.#retryMs = firstRetryMs;
+		this.#unanswered = [];
 		if (this.#pending === sent) {
 			this.adopt(revision);
 			return;
@@ -172,7 +188,15 @@ export class DocumentSync<T> {
 		const stored = await this.#transport.load();
 		if (!stored) this.#retryLater('No connection. Your work is kept on this device and sent later.');
 		else if (sameData(stored.document, sent)) this.#acknowledge(sent, stored.revision);
-		else this.#stop({ mine: this.#pending ?? sent, theirs: stored.document, theirRevision: stored.revision });
+		else if (this.#unanswered.some((earlier) => sameData(stored.document, earlier))) {
+			this.#unanswered = [];
+			this.revision = stored.revision;
+			this.#retryMs = firstRetryMs;
+			this.#keepCopy(this.#pending ?? sent);
+			this.message = null;
+			this.state = 'unsaved';
+		} else
+			this.#stop({ mine: this.#pending ?? sent, theirs: stored.document, theirRevision: stored.revision });
 	}
 
 	#stop(conflict: Conflict<T>): void {
@@ -184,7 +208,7 @@ export class DocumentSync<T> {
 
 	#retryLater(message: string): void {
 		this.state = 'offline';
-		this.message = message;
+		this.message = this.kept ? message : `${noRoom} It is sent as soon as the server can be reached.`;
 		this.#schedule(this.#retryMs);
 		this.#retryMs = Math.min(this.#retryMs * 2, longestRetryMs);
 	}
@@ -192,14 +216,22 @@ export class DocumentSync<T> {
 	#settle(revision: number): void {
 		this.#cancelTimer();
 		this.#pending = null;
+		this.#unanswered = [];
+		this.kept = true;
 		this.conflict = null;
 		this.message = null;
 		this.revision = revision;
 		this.state = 'saved';
 	}
 
-	#keepCopy(document: T): boolean {
-		return this.#copies.put({ document, baseRevision: this.revision, savedAtMs: Date.now() });
+	#keepCopy(document: T): void {
+		const earlier = this.#unanswered.filter((sent) => sent !== document);
+		this.kept = this.#copies.put({
+			document,
+			baseRevision: this.revision,
+			savedAtMs: Date.now(),
+			...(earlier.length > 0 && { unanswered: earlier })
+		});
 	}
 
 	#schedule(delayMs: number): void {

@@ -27,7 +27,8 @@ interface Problem {
 async function readProblem(response: Response): Promise<string> {
 	const fallback = `The server answered ${response.status}.`;
 	if (!(response.headers.get('content-type') ?? '').includes('json')) return fallback;
-	const problem = (await response.json()) as Problem;
+	const problem = (await response.json().catch(() => null)) as Problem | null;
+	if (!problem) return fallback;
 	const first = problem.errors?.[0];
 	const sentence = problem.detail ?? problem.title ?? fallback;
 	return first ? `${sentence} ${first.path}: ${first.message}` : sentence;
@@ -52,8 +53,13 @@ export function httpTransport<T>(url: string, fetcher: typeof fetch = fetch): Tr
 				};
 			}
 			if (response.ok) {
-				const answer = (await response.json()) as { revision: number };
-				return { kind: 'saved', revision: answer.revision };
+				// Something between here and the server may answer in its place, with a page of its own.
+				const answer = (await response.json().catch(() => null)) as { revision?: unknown } | null;
+				if (typeof answer?.revision === 'number') return { kind: 'saved', revision: answer.revision };
+				return {
+					kind: 'unreachable',
+					message: 'No proper answer came. Your work is kept on this device and sent again.'
+				};
 			}
 			if (response.status === 412) return { kind: 'stale' };
 			if (response.status === 401) {
