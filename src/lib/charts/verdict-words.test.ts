@@ -1,13 +1,14 @@
 import { describe, expect, it } from 'vitest';
 import type { WinterVerdict } from '$lib/core/results';
-import { clearAboveSentence, ruleWords, verdictSentence } from './verdict-words';
+import { asksNothing, clearAboveSentence, ruleWords, verdictSentence } from './verdict-words';
 
 const above: WinterVerdict = {
 	rule: { kind: 'clear-above', elevationDeg: 12 },
 	date: '2026-12-21',
 	met: true,
 	brokenBy: [],
-	clearAboveDeg: 11.36
+	clearAboveDeg: 11.36,
+	judgedMinutes: 240
 };
 const b03 = { trackerId: 'b', tag: 'B03', shadedUpToDeg: 14.24, minutes: 35 };
 const a01 = { trackerId: 'a', tag: 'A01', shadedUpToDeg: 12.6, minutes: 10 };
@@ -23,7 +24,11 @@ describe('the winter rule in words', () => {
 			'Not met: B03 is shaded up to 14.2°.'
 		);
 		expect(verdictSentence({ ...above, met: false, brokenBy: [b03, a01] })).toBe(
-			'Not met: B03 and 1 other are shaded up to 14.2°.'
+			'Not met: B03 and 1 other are shaded, up to 14.2°.'
+		);
+		// The worst is shaded longest; another one may be shaded higher.
+		expect(verdictSentence({ ...above, met: false, brokenBy: [a01, b03] })).toBe(
+			'Not met: A01 and 1 other are shaded, up to 14.2°.'
 		);
 	});
 
@@ -35,9 +40,17 @@ describe('the winter rule in words', () => {
 		);
 	});
 
+	it('does not praise a field where the sun never stands so high', () => {
+		const verdict = { ...above, clearAboveDeg: 8.4, judgedMinutes: 0 };
+		expect(asksNothing(verdict)).toBe(true);
+		expect(verdictSentence(verdict)).toBe(
+			'The sun is never seen above 12° that day, so this rule asks for nothing here.'
+		);
+	});
+
 	it('knows a field that is never shaded', () => {
 		expect(clearAboveSentence({ ...above, clearAboveDeg: null })).toBe(
-			'Nothing is shaded on the shortest day.'
+			'No tracker is shaded by others or by obstacles on the shortest day.'
 		);
 	});
 });

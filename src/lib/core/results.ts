@@ -93,6 +93,8 @@ export interface WinterVerdict {
 	brokenBy: { trackerId: string; tag: string; shadedUpToDeg: number; minutes: number }[];
 	/** Sun elevation above which no tracker of the field is shaded on the shortest day; null when never shaded. */
 	clearAboveDeg: number | null;
+	/** Minutes of the day that the rule looks at, with the sun above the skyline; 0 when it asks for nothing that day. */
+	judgedMinutes: number;
 }
 
 export interface MountPlaceResult {

@@ -85,6 +85,18 @@ describe('the winter rule', () => {
 		expect(winterVerdict(dark, layout, testPlace, { kind: 'clear-above', elevationDeg: 5 }).met).toBe(true);
 	});
 
+	it('says for how long of the day it was put to the test', () => {
+		// At 45 north the sun climbs to 21.6 degrees: above 21 for about an hour, above 22 never.
+		const at = (elevationDeg: number) =>
+			winterVerdict(day, layout, testPlace, { kind: 'clear-above', elevationDeg });
+		expect(at(22)).toMatchObject({ met: true, judgedMinutes: 0 });
+		expect(at(21).judgedMinutes).toBeGreaterThan(30);
+		const night = { kind: 'clear-window', fromSolarHour: 0, toSolarHour: 3 } as const;
+		expect(winterVerdict(day, layout, testPlace, night).judgedMinutes).toBe(0);
+		const noon = { kind: 'clear-window', fromSolarHour: 11, toSolarHour: 13 } as const;
+		expect(winterVerdict(day, layout, testPlace, noon).judgedMinutes).toBe(120);
+	});
+
 	it('has an empty day in the polar night and a whole one in the polar day', () => {
 		const north = { ...testPlace, latitudeDeg: 75 };
 		const polar = prepareField({ place: north, plot: testPlot(), layout });

@@ -9,7 +9,8 @@ const SLACK_DEG = 0.01;
 /**
  * Whether a layout keeps its winter rule on a day's shade, and who breaks it. A tracker counts as shaded when more
  * than a thousandth of its table is; minutes are those of the steps that break the rule. A sun behind the skyline or
- * behind the table breaks nothing. Worst first: by minutes, then by the height up to which it is shaded, then as
+ * behind the table breaks nothing; a day on which the sun never stands where the rule looks keeps it with 0 judged
+ * minutes, which says nothing about the layout. Worst first: by minutes, then by the height up to which it is shaded, then as
  * in the layout.
  */
 export function winterVerdict(
@@ -48,5 +49,6 @@ export function winterVerdict(
 		});
 	});
 	brokenBy.sort((a, b) => b.minutes - a.minutes || b.shadedUpToDeg - a.shadedUpToDeg);
-	return { rule, date: day.date, met: brokenBy.length === 0, brokenBy, clearAboveDeg };
+	const judgedMinutes = counted.filter(Boolean).length * stepMinutes;
+	return { rule, date: day.date, met: brokenBy.length === 0, brokenBy, clearAboveDeg, judgedMinutes };
 }

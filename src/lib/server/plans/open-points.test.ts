@@ -98,6 +98,7 @@ describe('open points before issue', () => {
 					date: '2026-12-21',
 					met: false,
 					clearAboveDeg: 20,
+					judgedMinutes: 240,
 					brokenBy: [{ trackerId: 'a', tag: 'A01', shadedUpToDeg: 20, minutes: 60 }]
 				}
 			}

@@ -37,6 +37,11 @@ function shadePoints({ shade, verdict }: RunsBehind): string[] {
 		const tags = verdict.brokenBy.map((each) => each.tag);
 		return [`The winter rule is not met: ${named(tags)} ${tags.length === 1 ? 'breaks' : 'break'} it.`];
 	}
+	if (verdict && verdict.judgedMinutes === 0) {
+		return [
+			'The winter rule asks for nothing here: the sun never stands where it looks on the shortest day.'
+		];
+	}
 	return [];
 }
 

@@ -1,7 +1,7 @@
 import { desc, eq } from 'drizzle-orm';
 import { CORE_VERSION, type Layout, type Place, type Plot, type ShadeResult } from '$lib/core';
 import { pegRows } from '$lib/exchange/peg-csv-rows';
-import { formatDay, formatPercent, isoDateAt } from '$lib/i18n';
+import { formatDay, formatNumber, formatPercent, isoDateAt } from '$lib/i18n';
 import type { Run } from '$lib/schema/run';
 import type { PlanContent } from '$lib/sheets';
 import type { Actor } from '../auth/actor';
@@ -80,9 +80,11 @@ export async function lastRevision(projectId: string): Promise<string | null> {
 
 function shadeNote(run: Run, result: ShadeResult, place: Place): string {
 	const day = formatDay(isoDateAt(Date.parse(run.finishedAt ?? run.createdAt), place.timeZone), true);
-	const rule = result.winterRule.met ? 'met' : 'not met';
+	const { met, judgedMinutes } = result.winterRule;
+	const rule = !met ? 'not met' : judgedMinutes === 0 ? 'not put to the test' : 'met';
+	const trees = run.treeYears > 0 ? `, trees after ${formatNumber(run.treeYears)} years` : '';
 	const loss = formatPercent(result.field.beamLoss, 1);
-	return `Shade run of ${day} for the year ${run.year}: beam loss by shade ${loss}, winter rule ${rule}.`;
+	return `Shade run of ${day} for the year ${run.year}${trees}: beam loss by shade ${loss}, winter rule ${rule}.`;
 }
 
 /** The content of a plan's sheets; without `issued` it is a draft. */

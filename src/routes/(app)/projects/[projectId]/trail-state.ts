@@ -32,6 +32,8 @@ export interface TrailFacts {
 	mounts: RunFacts | null;
 	/** null while it is not known. */
 	winterRuleBrokenBy: number | null;
+	/** False when the shortest day never puts the rule to the test. */
+	winterRuleTested?: boolean;
 	mountChosen: boolean;
 	/** Plans of this layout, newest first. */
 	plans: { revision: string; layoutRevision: number }[];
@@ -77,7 +79,8 @@ function shade(facts: TrailFacts): Told {
 	const broken = facts.winterRuleBrokenBy;
 	if (broken)
 		return { state: 'open', count: broken, next: `Winter rule broken by ${plural(broken, 'tracker')}.` };
-	return { state: 'settled', next: broken === 0 ? 'Year computed, winter rule met.' : 'Year computed.' };
+	const met = broken === 0 && facts.winterRuleTested !== false;
+	return { state: 'settled', next: met ? 'Year computed, winter rule met.' : 'Year computed.' };
 }
 
 function sensors(facts: TrailFacts): Told {
