@@ -26,7 +26,11 @@ export function utcOffsetMinutes(timeMs: number, timeZone: string): number {
 	return Math.round((asUtc - Math.floor(timeMs / 1000) * 1000) / 60_000);
 }
 
-/** The zone's standard time in a year: the smaller of its January and July offsets. */
+/**
+ * The zone's standard time in a year, by which runs and pages alike sort steps into days and hours: the smaller of its
+ * January and July offsets, since summer time adds in either hemisphere. A month that goes back for itself (Ramadan in
+ * Morocco) does not make a standard time.
+ */
 export function standardOffsetMinutes(year: number, timeZone: string): number {
 	return Math.min(
 		utcOffsetMinutes(Date.UTC(year, 0, 1, 12), timeZone),

@@ -2,9 +2,9 @@ import { createHash } from 'node:crypto';
 import { CORE_VERSION } from '$lib/core';
 import type { Layout, Place, Plot, WinterRule } from '$lib/core/document';
 import type { RunInput } from '$lib/core/results';
+import { standardOffsetMinutes } from '$lib/i18n';
 import type { RunKind } from '$lib/schema/run';
 import { defaultWinterRule } from '$lib/schema/winter-rule';
-import { standardOffsetMinutes } from '../projects/standard-offset';
 import { canonicalJson } from './canonical-json';
 
 export interface RunSources {
@@ -30,7 +30,7 @@ export function runInput(sources: RunSources, terms: RunTerms): RunInput {
 		year: terms.year,
 		stepMinutes: terms.stepMinutes,
 		treeYears: terms.treeYears,
-		utcOffsetMinutes: standardOffsetMinutes(sources.place.timeZone, terms.year)
+		utcOffsetMinutes: standardOffsetMinutes(terms.year, sources.place.timeZone)
 	};
 }
 
