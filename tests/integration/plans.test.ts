@@ -8,6 +8,7 @@ import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
 import type { Actor } from '$lib/server/auth/actor';
 import { db } from '$lib/server/db';
 import { plans } from '$lib/server/db/schema';
+import { createLayout } from '$lib/server/layouts/create-layout';
 import { getLayout } from '$lib/server/layouts/get-layout';
 import { saveLayout } from '$lib/server/layouts/save-layout';
 import { draftPlan, draftSheetSvg } from '$lib/server/plans/draft-plan';
@@ -20,6 +21,8 @@ import { createProject } from '$lib/server/projects/create-project';
 import { openProject } from '$lib/server/projects/open-project';
 import { savePlot } from '$lib/server/projects/save-plot';
 import { inventedPlan } from '../fixtures/invented-field';
+import { isMountRunOf } from '$lib/server/runs/is-mount-run-of';
+import { startRun } from '$lib/server/runs/start-run';
 import { expectRefused, joinProject, makePerson } from './helpers/people';
 import { useTemporaryDatabase } from './helpers/temporary-database';
 
@@ -81,6 +84,27 @@ describe('a plan', () => {
 		expect(await draftSheetSvg(owner, projectId, layoutId, 1)).toContain('DRAFT — not for construction');
 	});
 
+	it('knows a mount choice whose run the layout has left behind, and one that a copy shares', async () => {
+		const { id } = await startRun(owner, projectId, {
+			kind: 'mounts',
+			layoutId,
+			year: 2026,
+			stepMinutes: 20,
+			treeYears: 0
+		});
+		expect(await isMountRunOf(projectId, layoutId, id)).toBe(true);
+		const copy = await createLayout(owner, projectId, { name: 'Copy', document: field.layout });
+		expect(await isMountRunOf(projectId, copy.id, id)).toBe(true);
+		const moved = structuredClone(field.layout);
+		moved.trackers[0].northM += 1;
+		await draw(moved);
+		expect(await isMountRunOf(projectId, layoutId, id)).toBe(false);
+		await draw();
+		expect(await isMountRunOf(projectId, layoutId, id)).toBe(true);
+		expect(await isMountRunOf(projectId, layoutId, 'none')).toBe(false);
+		expect(await isMountRunOf(projectId, layoutId, null)).toBe(true);
+	});
+
 	it('gets letters in order, holds its files with their hashes, and the crew reads them', async () => {
 		const first = await issuePlan(owner, projectId, { layoutId, reason: 'Pegging starts' });
 		const second = await issuePlan(owner, projectId, { layoutId, reason: 'Again' });
@@ -127,9 +151,11 @@ describe('a plan', () => {
 
 	it('never changes when plot and layout do', async () => {
 		const before = (await listPlans(owner, projectId, { limit: 1 })).items[0];
+		expect(before.plotRevision).toBe(2);
 		const moved = structuredClone(field.layout);
 		moved.trackers[0].eastM += 1;
 		await draw(moved);
+		await savePlot(owner, projectId, { ...field.plot, setBackM: field.plot.setBackM + 1 }, 2);
 		expect((await listPlans(owner, projectId, { limit: 1 })).items[0]).toEqual(before);
 		for (const told of before.files) {
 			const { bytes } = await getPlanFile(owner, before.id, told.name);

@@ -23,6 +23,7 @@ export const planSummarySchema = z.strictObject({
 	/** null when the layout was deleted afterwards. */
 	layoutId: idSchema.nullable(),
 	layoutRevision: z.number().int(),
+	plotRevision: z.number().int(),
 	/** `A`, `B`, ... */
 	revision: z.string(),
 	title: z.string(),

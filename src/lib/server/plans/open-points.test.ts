@@ -59,7 +59,7 @@ const done = (over: Partial<Run> = {}): Run => ({
 	outOfDate: false,
 	...over
 });
-const settled = { shade: done(), mounts: done({ kind: 'mounts' }), verdict: null };
+const settled = { shade: done(), mounts: done({ kind: 'mounts' }), verdict: null, choiceStands: true };
 
 describe('open points before issue', () => {
 	it('are none when layout, runs and mount are settled', () => {
@@ -84,6 +84,12 @@ describe('open points before issue', () => {
 			mounts: { ...none.mounts, exceptions: { a: mount } }
 		};
 		expect(openPoints(land, part, settled)).toEqual(['No sensor mount is chosen for A02.']);
+	});
+
+	it('name a choice that was made from a run of an earlier layout', () => {
+		expect(openPoints(land, layout, { ...settled, choiceStands: false })).toEqual([
+			'The mount was chosen from an earlier sensor run: look at the newer one and choose again.'
+		]);
 	});
 
 	it('carry the findings of the layout and a broken winter rule', () => {

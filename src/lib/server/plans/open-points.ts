@@ -6,6 +6,8 @@ export interface RunsBehind {
 	mounts: Run | null;
 	/** Of the shade run when it is done and not out of date. */
 	verdict: WinterVerdict | null;
+	/** False when the mounts were chosen from a run that plot or trackers have left behind. */
+	choiceStands: boolean;
 }
 
 /** Tags named in one sentence before the rest is counted. */
@@ -45,7 +47,7 @@ function shadePoints({ shade, verdict }: RunsBehind): string[] {
 	return [];
 }
 
-function mountPoints(layout: Layout, { mounts }: RunsBehind): string[] {
+function mountPoints(layout: Layout, { mounts, choiceStands }: RunsBehind): string[] {
 	const { common, exceptions } = layout.mounts;
 	const without = layout.trackers.filter((tracker) => !common && !exceptions[tracker.id]);
 	if (without.length === layout.trackers.length) return ['No sensor mount is chosen.'];
@@ -54,6 +56,8 @@ function mountPoints(layout: Layout, { mounts }: RunsBehind): string[] {
 	if (!mounts || mounts.status !== 'done')
 		points.push('No finished sensor run stands behind the chosen mount.');
 	else if (mounts.outOfDate) points.push('The sensor run is out of date: plot or layout changed after it.');
+	else if (!choiceStands)
+		points.push('The mount was chosen from an earlier sensor run: look at the newer one and choose again.');
 	return points;
 }
 

@@ -11,6 +11,7 @@ import { notFound } from '../errors';
 import { requireProject } from '../guard';
 import { currentSources } from '../runs/current-input';
 import { getShadeResult } from '../runs/get-run-result';
+import { isMountRunOf } from '../runs/is-mount-run-of';
 import { latestRun } from '../runs/latest-run';
 import { openPoints } from './open-points';
 import { nextRevision } from './revision-letter';
@@ -62,7 +63,11 @@ export async function planSources(actor: Actor, projectId: string, layoutId: str
 		teamName: names.team,
 		projectId,
 		lastRevision: await lastRevision(projectId),
-		openPoints: openPoints(plot, layout, { ...runs, verdict: result?.winterRule ?? null }),
+		openPoints: openPoints(plot, layout, {
+			...runs,
+			verdict: result?.winterRule ?? null,
+			choiceStands: await isMountRunOf(projectId, layoutId, layout.mounts.fromRunId)
+		}),
 		shadeNote: usable && result ? shadeNote(usable, result, place) : null,
 		runs
 	};

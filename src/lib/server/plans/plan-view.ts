@@ -1,4 +1,4 @@
-import { inArray } from 'drizzle-orm';
+import { inArray, sql } from 'drizzle-orm';
 import type { PlanSummary } from '$lib/schema/plan';
 import { db } from '../db';
 import { planFiles, plans, users } from '../db/schema';
@@ -9,6 +9,8 @@ export const planColumns = {
 	projectId: plans.projectId,
 	layoutId: plans.layoutId,
 	layoutRevision: plans.layoutRevision,
+	/** Stands in the snapshot only. */
+	plotRevision: sql<number>`cast(json_value(${plans.snapshot}, '$.content.heading.plotRevision') as signed)`,
 	revision: plans.revisionLetter,
 	title: plans.title,
 	reason: plans.reason,
@@ -21,6 +23,7 @@ interface PlanRow {
 	projectId: string;
 	layoutId: string | null;
 	layoutRevision: number;
+	plotRevision: number;
 	revision: string;
 	title: string;
 	reason: string;

@@ -11,7 +11,8 @@ const fresh: TrailFacts = {
 	winterRuleBrokenBy: null,
 	mountChosen: false,
 	plans: [],
-	layoutRevision: 1
+	layoutRevision: 1,
+	plotRevision: 1
 };
 const done = { status: 'done', outOfDate: false } as const;
 const states = (facts: Partial<TrailFacts>) => trailSteps({ ...fresh, ...facts }).map((step) => step.state);
@@ -32,7 +33,7 @@ describe('the trail', () => {
 			mounts: done,
 			winterRuleBrokenBy: 0,
 			mountChosen: true,
-			plans: [{ revision: 'A', layoutRevision: 1 }]
+			plans: [{ revision: 'A', layoutRevision: 1, plotRevision: 1 }]
 		};
 		expect(states(facts).slice(0, 5)).toEqual(Array(5).fill('settled'));
 	});
@@ -49,8 +50,13 @@ describe('the trail', () => {
 	it('opens a step again when the layout has changed since', () => {
 		expect(step('shade', { shade: { status: 'done', outOfDate: true } })?.state).toBe('open');
 		expect(
-			step('plan', { plans: [{ revision: 'B', layoutRevision: 1 }], layoutRevision: 2 })?.next
-		).toContain('since revision B');
+			step('plan', { plans: [{ revision: 'B', layoutRevision: 1, plotRevision: 1 }], layoutRevision: 2 })
+				?.next
+		).toBe('The layout has changed since revision B was issued.');
+		// Ground and boundary make the levels and the set-back of the sheets.
+		expect(
+			step('plan', { plans: [{ revision: 'B', layoutRevision: 1, plotRevision: 1 }], plotRevision: 2 })
+		).toMatchObject({ state: 'open', next: 'The plot has changed since revision B was issued.' });
 	});
 
 	it('shows running and failed work as such', () => {

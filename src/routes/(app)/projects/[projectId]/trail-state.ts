@@ -36,8 +36,9 @@ export interface TrailFacts {
 	winterRuleTested?: boolean;
 	mountChosen: boolean;
 	/** Plans of this layout, newest first. */
-	plans: { revision: string; layoutRevision: number }[];
+	plans: { revision: string; layoutRevision: number; plotRevision: number }[];
 	layoutRevision: number;
+	plotRevision: number;
 }
 
 type Told = Pick<TrailStep, 'state' | 'next'> & { count?: number };
@@ -94,9 +95,15 @@ function sensors(facts: TrailFacts): Told {
 function plan(facts: TrailFacts): Told {
 	const last = facts.plans[0];
 	if (!last) return { state: 'nothing', next: 'Next: issue the plan.' };
-	return last.layoutRevision === facts.layoutRevision
-		? { state: 'settled', next: `Revision ${last.revision} is issued.` }
-		: { state: 'open', count: 1, next: `The layout has changed since revision ${last.revision} was issued.` };
+	const layout = last.layoutRevision !== facts.layoutRevision;
+	if (!layout && last.plotRevision === facts.plotRevision)
+		return { state: 'settled', next: `Revision ${last.revision} is issued.` };
+	const what = layout ? 'layout' : 'plot';
+	return {
+		state: 'open',
+		count: 1,
+		next: `The ${what} has changed since revision ${last.revision} was issued.`
+	};
 }
 
 function site(facts: TrailFacts): Told {
