@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { fieldShade, prepareField, type Layout } from '$lib/core';
 import { emptyPlot, modelLibrary } from '$lib/schema';
-import { castersOf } from './shaded-by';
+import { castersOf, noSunWords } from './shaded-by';
 
 const place = {
 	latitudeDeg: 41.2,
@@ -52,5 +52,25 @@ describe('who shades a tracker', () => {
 				expect(castersOf(field, index, sun).length > 0).toBe(shares[index] > 1e-9);
 			});
 		}
+	});
+
+	it('blames nobody at night, behind the skyline or for a table with its back to the sun', () => {
+		const night = { azimuthDeg: 300, elevationDeg: -10 };
+		expect(castersOf(field, 1, night)).toEqual([]);
+		expect(noSunWords(field, 1, night)).toBe('the sun is down');
+		const low = { azimuthDeg: 90, elevationDeg: 5 };
+		expect(noSunWords(field, 0, low)).toBeNull();
+		const skyline = [
+			{ azimuthDeg: 0, elevationDeg: 8 },
+			{ azimuthDeg: 180, elevationDeg: 8 }
+		];
+		const hemmed = prepareField({ place, plot: { ...emptyPlot(), skyline }, layout });
+		expect(castersOf(hemmed, 0, low)).toEqual([]);
+		expect(noSunWords(hemmed, 0, low)).toBe('the sun is behind the skyline');
+		const west = structuredClone(layout);
+		west.trackers[0].posture = { kind: 'standing', azimuthDeg: 270, tiltDeg: 80 };
+		expect(noSunWords(prepareField({ place, plot: emptyPlot(), layout: west }), 0, low)).toBe(
+			'its back is to the sun'
+		);
 	});
 });

@@ -1,4 +1,4 @@
-import { shadeScene, trackerPoses, type Field } from '$lib/core';
+import { fieldSunHidden, shadeScene, sunVector, tableAxes, trackerPoses, type Field } from '$lib/core';
 
 type Sun = { azimuthDeg: number; elevationDeg: number };
 
@@ -13,6 +13,7 @@ interface Caster {
  * target with the core's exact areas; obstacles and skyline are left out.
  */
 export function castersOf(field: Field, target: number, sun: Sun): number[] {
+	if (fieldSunHidden(field, sun)) return [];
 	const poses = trackerPoses(field, sun);
 	const tables = poses.map((pose, index) => ({
 		id: String(index),
@@ -36,6 +37,17 @@ export function castersOf(field: Field, target: number, sun: Sun): number[] {
 		if (shaded.frontLit && shaded.shadedShare > 1e-9) found.push({ index, share: shaded.shadedShare });
 	});
 	return found.sort((a, b) => b.share - a.share).map((caster) => caster.index);
+}
+
+/** Why no sun can reach a table whatever stands around it, as the end of a sentence; null when it could. */
+export function noSunWords(field: Field, target: number, sun: Sun): string | null {
+	if (sun.elevationDeg <= 0) return 'the sun is down';
+	if (fieldSunHidden(field, sun)) return 'the sun is behind the skyline';
+	const pose = trackerPoses(field, sun)[target];
+	if (!pose) return null;
+	const s = sunVector(sun.azimuthDeg, sun.elevationDeg);
+	const { n } = tableAxes(pose.azimuthDeg, pose.tiltDeg);
+	return n[0] * s[0] + n[1] * s[1] + n[2] * s[2] <= 0 ? 'its back is to the sun' : null;
 }
 
 interface Box {
