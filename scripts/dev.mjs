@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { openDatabase } from './lib/database.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { root } from './lib/paths.mjs';
-import { isPortFree, superviseChild } from './lib/process.mjs';
+import { endOnSignal, isPortFree, superviseChild } from './lib/process.mjs';
 import { Refusal, runMain, say } from './lib/say.mjs';
 import { appEnvironment, demoLines } from './lib/settings.mjs';
 
@@ -16,7 +16,10 @@ runMain(async () => {
 			`Port ${port} on ${host} is taken: stop what listens there or set PORT to another one.`
 		);
 	ensurePackages();
-	const database = await openDatabase();
+	const signals = endOnSignal();
+	const opening = openDatabase();
+	signals.add(() => opening.then((opened) => opened.stop()));
+	const database = await signals.during(opening);
 	const vite = spawn(
 		process.execPath,
 		[
@@ -31,9 +34,15 @@ runMain(async () => {
 		{
 			cwd: root,
 			stdio: ['ignore', 'inherit', 'inherit'],
-			env: appEnvironment({ url: database.url, ownDatabase: database.own, origin: `http://${host}:${port}` })
+			env: appEnvironment({
+				url: database.url,
+				ownDatabase: database.own,
+				host,
+				origin: `http://${host}:${port}`
+			})
 		}
 	);
+	signals.release();
 	superviseChild(vite, database.stop);
 	say(`\nTiltyard for work: http://${host}:${port}\n${demoLines().join('\n')}\n`);
 });

@@ -1,6 +1,6 @@
 import { ensureBuild } from './lib/build.mjs';
 import { openTestDatabase } from './lib/test-database.mjs';
-import { isRunning, superviseChild } from './lib/process.mjs';
+import { endChild, endOnSignal, isRunning, superviseChild } from './lib/process.mjs';
 import { runMain } from './lib/say.mjs';
 import { serveBuild } from './lib/serve.mjs';
 import { appEnvironment } from './lib/settings.mjs';
@@ -9,15 +9,25 @@ import { appEnvironment } from './lib/settings.mjs';
 runMain(async () => {
 	const port = Number(process.env.E2E_PORT ?? 4173);
 	await ensureBuild();
-	const database = await openTestDatabase('tiltyard_e2e');
+	const signals = endOnSignal();
+	const opening = openTestDatabase('tiltyard_e2e');
+	signals.add(() => opening.then((opened) => opened.stop()));
+	const database = await signals.during(opening);
 	try {
-		const origin = `http://127.0.0.1:${port}`;
-		const env = { LOG_LEVEL: 'warn', ...appEnvironment({ url: database.url, ownDatabase: true, origin }) };
-		const child = await serveBuild({ host: '127.0.0.1', port, env });
+		const host = '127.0.0.1';
+		const origin = `http://${host}:${port}`;
+		const env = {
+			LOG_LEVEL: 'warn',
+			...appEnvironment({ url: database.url, ownDatabase: true, host, origin })
+		};
+		const started = (/** @type {import('node:child_process').ChildProcess} */ server) =>
+			signals.add(() => endChild(server));
+		const child = await signals.during(serveBuild({ host, port, env, started }));
+		signals.release();
 		superviseChild(child, database.stop);
 		endWithOwner(Number(process.env.E2E_OWNER ?? 0));
 	} catch (error) {
-		await database.stop();
+		await signals.endAll();
 		throw error;
 	}
 });

@@ -1,10 +1,10 @@
 import { ensureBuild } from './lib/build.mjs';
 import { openDatabase } from './lib/database.mjs';
 import { ensurePackages } from './lib/packages.mjs';
-import { isPortFree, superviseChild } from './lib/process.mjs';
+import { endChild, endOnSignal, isPortFree, superviseChild } from './lib/process.mjs';
 import { Refusal, runMain, say, secondsSince } from './lib/say.mjs';
 import { serveBuild } from './lib/serve.mjs';
-import { appEnvironment, demoAllowed, demoLines } from './lib/settings.mjs';
+import { appEnvironment, demoAllowed, demoLines, isAtHome } from './lib/settings.mjs';
 
 /** `npm start`: from a bare checkout to a served application; see README. */
 runMain(async () => {
@@ -21,28 +21,43 @@ runMain(async () => {
 		);
 
 	ensurePackages();
-	const building = ensureBuild();
+	const signals = endOnSignal();
+	const endSoon = (/** @type {import('node:child_process').ChildProcess} */ child) =>
+		signals.add(() => endChild(child));
+	const building = ensureBuild(endSoon);
 	// Awaited below; a failure must not count as unhandled while the database starts.
 	building.catch(() => undefined);
-	const database = await openDatabase();
-	// A signal before the application runs still stops the database.
-	const early = () => void database.stop().then(() => process.exit(0));
-	process.on('SIGINT', early).on('SIGTERM', early);
+	const opening = openDatabase();
+	// When it can't be opened, the reason is told below.
+	signals.add(() =>
+		opening.then(
+			(opened) => opened.stop(),
+			() => undefined
+		)
+	);
+	/** @type {boolean} */
+	let own;
 	try {
-		await building;
-		const env = appEnvironment({ url: database.url, ownDatabase: database.own, origin });
-		const child = await serveBuild({ host, port, env });
-		process.off('SIGINT', early).off('SIGTERM', early);
+		const database = await signals.during(opening);
+		own = database.own;
+		await signals.during(building);
+		const env = appEnvironment({ url: database.url, ownDatabase: own, host, origin });
+		const child = await signals.during(serveBuild({ host, port, env, started: endSoon }));
+		signals.release();
 		superviseChild(child, database.stop);
 	} catch (error) {
-		await database.stop();
+		await signals.endAll();
 		throw error;
 	}
 	say(`\nTiltyard is ready after ${secondsSince(since)} s: ${origin}\n`);
-	if (demoAllowed(database.own)) say(`${demoLines().join('\n')}\n`);
+	if (demoAllowed(own)) say(`${demoLines().join('\n')}\n`);
 	else
 		say(
 			'NODE_ENV=production with a database of your own: the demo is not put in, its accounts are refused.\n'
+		);
+	if (demoAllowed(own) && !isAtHome(host, origin))
+		say(
+			'This address can be reached from other machines: the mailbox is shut (set SMTP_URL to send letters), and the demo sign-ins above are open to whoever knows them.\n'
 		);
 	say('Ctrl-C stops it.');
 });

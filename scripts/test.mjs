@@ -5,7 +5,7 @@ import { check, countPlaywright, countVitest, endChecks, suite } from './lib/che
 import { openMariadb } from './lib/mariadb.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { dataPath, findProgram, root } from './lib/paths.mjs';
-import { freePort } from './lib/process.mjs';
+import { endOnSignal, freePort } from './lib/process.mjs';
 import { runMain, say, secondsSince } from './lib/say.mjs';
 
 /** `npm test`: brings what it needs, runs everything, ends with the line `N passed, N failed`. */
@@ -20,7 +20,11 @@ runMain(async () => {
 
 	// The tests' own server, held open for the whole run; nothing of an operator's database is touched.
 	delete process.env.DATABASE_URL;
-	const database = await openMariadb('test', 'tiltyard_hold', { durable: false });
+	const signals = endOnSignal();
+	const opening = openMariadb('test', 'tiltyard_hold', { durable: false });
+	signals.add(() => opening.then((opened) => opened.stop()));
+	const database = await signals.during(opening);
+	signals.release();
 	let interrupted = false;
 	for (const signal of /** @type {NodeJS.Signals[]} */ (['SIGINT', 'SIGTERM', 'SIGHUP']))
 		process.on(signal, () => {

@@ -1,5 +1,6 @@
 import { createHash, randomBytes } from 'node:crypto';
 import { openDatabase } from './lib/database.mjs';
+import { endOnSignal } from './lib/process.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { Refusal, runMain, say } from './lib/say.mjs';
 
@@ -22,7 +23,10 @@ runMain(async () => {
 	const email = process.argv[2]?.trim().toLowerCase();
 	if (!email) throw new Refusal('Say for whom: npm run token -- owner@tiltyard.test');
 	ensurePackages();
-	const database = await openDatabase();
+	const signals = endOnSignal();
+	const opening = openDatabase();
+	signals.add(() => opening.then((opened) => opened.stop()));
+	const database = await signals.during(opening);
 	const { createConnection } = await import('mysql2/promise');
 	try {
 		const connection = await createConnection({ uri: database.url, timezone: 'Z' });

@@ -35,9 +35,10 @@ export function sourceHash() {
 
 /**
  * Builds when the sources differ from those of the last build.
+ * @param {(child: import('node:child_process').ChildProcess) => void} [started] is given the process that builds
  * @returns {Promise<boolean>} whether it had to build
  */
-export async function ensureBuild() {
+export async function ensureBuild(started) {
 	const wanted = sourceHash();
 	if (existsSync(stamp) && readFileSync(stamp, 'utf8') === wanted) return false;
 	const since = performance.now();
@@ -48,6 +49,7 @@ export async function ensureBuild() {
 			stdio: ['ignore', 'pipe', 'pipe'],
 			env: { ...process.env, NODE_ENV: 'production' }
 		});
+		started?.(vite);
 		let text = '';
 		vite.stdout.on('data', (chunk) => (text += chunk));
 		vite.stderr.on('data', (chunk) => (text += chunk));

@@ -63,6 +63,59 @@ export async function waitUntil(
 	}
 }
 
+const endSignals = /** @type {NodeJS.Signals[]} */ (['SIGINT', 'SIGTERM', 'SIGHUP']);
+
+/**
+ * For the time before a command has its child under supervision: Ctrl-C, SIGTERM or hang-up end what was added, the
+ * last first, and then this process. Nothing that was half started stays behind.
+ */
+export function endOnSignal() {
+	/** @type {Array<() => Promise<unknown>>} */
+	const ends = [];
+	let asked = false;
+	const endAll = async () => {
+		for (let end = ends.pop(); end; end = ends.pop()) await end();
+	};
+	const onSignal = () => {
+		if (asked) return;
+		asked = true;
+		endAll().then(
+			() => process.exit(0),
+			(error) => {
+				process.stderr.write(`${error?.stack ?? error}\n`);
+				process.exit(1);
+			}
+		);
+	};
+	for (const signal of endSignals) process.on(signal, onSignal);
+	return {
+		add(/** @type {() => Promise<unknown>} */ end) {
+			ends.push(end);
+		},
+		/**
+		 * What the promise gives. Once a signal has come it settles no more: the command is on its way out.
+		 * @template T
+		 * @param {Promise<T>} promise
+		 * @returns {Promise<T>}
+		 */
+		async during(promise) {
+			try {
+				const value = await promise;
+				if (!asked) return value;
+			} catch (error) {
+				if (!asked) throw error;
+			}
+			return new Promise(() => undefined);
+		},
+		/** Ends what was added, as after a failure. */
+		endAll,
+		/** Hands the signals on to whoever supervises from here. */
+		release() {
+			for (const signal of endSignals) process.off(signal, onSignal);
+		}
+	};
+}
+
 /**
  * Ties this command to its child: Ctrl-C, SIGTERM or hang-up end the child, then `cleanUp` runs, then this process
  * ends. A child that ends by itself takes the command with it, with the child's status.
@@ -71,7 +124,7 @@ export async function waitUntil(
  */
 export function superviseChild(child, cleanUp) {
 	let asked = false;
-	for (const signal of /** @type {NodeJS.Signals[]} */ (['SIGINT', 'SIGTERM', 'SIGHUP']))
+	for (const signal of endSignals)
 		process.on(signal, () => {
 			if (asked) return;
 			asked = true;

@@ -6,10 +6,12 @@ import { Refusal } from './say.mjs';
 
 /**
  * Starts the built application and waits until it is ready.
- * @param {{ host: string, port: number, env: NodeJS.ProcessEnv }} options `env` as `appEnvironment` makes it
+ * @param {{ host: string, port: number, env: NodeJS.ProcessEnv,
+ *   started?: (child: import('node:child_process').ChildProcess) => void }} options `env` as `appEnvironment` makes it;
+ *   `started` is given the child before it is ready
  * @returns the child, already answering on /healthz
  */
-export async function serveBuild({ host, port, env }) {
+export async function serveBuild({ host, port, env, started }) {
 	const child = spawn(process.execPath, [join(root, 'build', 'index.js')], {
 		cwd: root,
 		stdio: ['ignore', 'inherit', 'inherit'],
@@ -24,6 +26,7 @@ export async function serveBuild({ host, port, env }) {
 			SHUTDOWN_TIMEOUT: process.env.SHUTDOWN_TIMEOUT ?? '2'
 		}
 	});
+	started?.(child);
 	const reach = host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host;
 	const address = `http://${reach.includes(':') ? `[${reach}]` : reach}:${port}/healthz`;
 	let ready = false;
