@@ -106,7 +106,8 @@ export const handleError: HandleServerError = ({ error: thrown, event, status, m
 	const refused = asAppError(thrown);
 	if (status === 404 && !refused)
 		return { message: 'There is nothing at this address, or it is not yours to see.', reference };
-	logger.error(
+	// What the asker did wrong is no failure of ours: it must not fill the log of failures.
+	logger[status >= 500 ? 'error' : 'info'](
 		{ requestId: reference, route: event.route.id, method: event.request.method, status, error: thrown },
 		message
 	);

@@ -2,10 +2,13 @@ import { AppError } from '../errors';
 
 const megabyte = 1024 * 1024;
 
+/** Largest body of a page's form. */
+export const FORM_BYTES = 1 * megabyte;
+
 /** Largest body by the beginning of the path; documents with 100,000 corners fit into the API's. */
 const limits: [prefix: string, bytes: number][] = [
 	['/api/', 16 * megabyte],
-	['/', 1 * megabyte]
+	['/', FORM_BYTES]
 ];
 
 /** Refuses a body that says it is too long, before any of it is read. The server's own limit stops unannounced ones. */

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import type { Place, WinterRule } from '$lib/core';
 import { outsideRange, parseCoordinates, parseQuantity } from '$lib/i18n';
-import { isTimeZone, projectNameSchema } from '$lib/schema';
+import { idSchema, isTimeZone, projectNameSchema } from '$lib/schema';
 
 /** A typed quantity as a number in its unit; the same sentences as the field itself gives. */
 function typedQuantity(unit: string, min: number, max: number, empty?: number) {
@@ -66,8 +66,9 @@ function readRule(form: RuleForm, refuse: (path: string, message: string) => voi
 	return { kind: 'clear-window', fromSolarHour, toSolarHour };
 }
 
-/** The form of a project's facts, new or changed. An empty time zone means: find it from the place. */
-export const projectFormSchema = z.object({ ...placeFields, ...ruleFields }).transform((form, context) => {
+type FactsForm = z.output<z.ZodObject<typeof placeFields & typeof ruleFields>>;
+
+function readFacts(form: FactsForm, context: z.RefinementCtx) {
 	const refuse = (path: string, message: string) =>
 		context.addIssue({ code: 'custom', path: [path], message });
 	const winterRule = readRule(form, refuse);
@@ -82,7 +83,15 @@ export const projectFormSchema = z.object({ ...placeFields, ...ruleFields }).tra
 		...(form.timeZone ? { timeZone: form.timeZone } : {})
 	};
 	return { name: form.name, place, winterRule };
-});
+}
+
+/** The form of a project's facts. An empty time zone means: find it from the place. */
+export const projectFormSchema = z.object({ ...placeFields, ...ruleFields }).transform(readFacts);
+
+/** The same of a new project, which says in which team when there are several. */
+export const newProjectFormSchema = z
+	.object({ ...placeFields, ...ruleFields, teamId: z.union([z.literal(''), idSchema]).optional() })
+	.transform((form, context) => ({ ...readFacts(form, context), teamId: form.teamId }));
 
 /** What the form shows of a project that stands. */
 export interface ProjectFields {

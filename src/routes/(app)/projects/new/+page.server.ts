@@ -5,7 +5,7 @@ import { requireUser } from '$lib/server/guard';
 import { answerForm } from '$lib/server/http/read-form';
 import { createProject } from '$lib/server/projects/create-project';
 import { teamsOf } from '$lib/server/teams/teams-of';
-import { projectFormSchema } from '../project-form';
+import { newProjectFormSchema } from '../project-form';
 import type { Actions, PageServerLoad } from './$types';
 
 export const load: PageServerLoad = async (event) => {
@@ -16,8 +16,7 @@ export const load: PageServerLoad = async (event) => {
 export const actions: Actions = {
 	default: async (event) => {
 		const actor = requireUser(event);
-		const teamId = (await event.request.clone().formData()).get('teamId');
-		return answerForm(event, projectFormSchema, async (form) => {
+		return answerForm(event, newProjectFormSchema, async ({ teamId, ...form }) => {
 			const wish = newProjectSchema.parse({ ...form, ...(teamId ? { teamId } : {}) });
 			const project = await createProject(actor, wish);
 			redirect(303, `/projects/${project.id}/plot`);
