@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import type { BoundaryPart, Ground, Obstacle, Plot, SkylinePoint } from '../core/document';
-import { idSchema, quantity } from './quantity';
+import { idSchema, optionalLabel, quantity } from './quantity';
 import { strayHole } from './plot-checks';
 import { ringProblem } from './ring';
 
@@ -95,7 +95,7 @@ export const skylineSchema = z
 const boxSchema = z.strictObject({
 	id: idSchema,
 	kind: z.literal('box'),
-	name: z.string().trim().max(80, { error: 'Keep the name within 80 characters.' }),
+	name: optionalLabel(80),
 	eastM,
 	northM,
 	sizeXM: quantity(0.01, 2000, 'm'),
@@ -108,7 +108,7 @@ const treeSchema = z
 	.strictObject({
 		id: idSchema,
 		kind: z.literal('tree'),
-		name: z.string().trim().max(80, { error: 'Keep the name within 80 characters.' }),
+		name: optionalLabel(80),
 		eastM,
 		northM,
 		heightM: quantity(0.1, 120, 'm'),

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import './sentences';
 
 /** A finite number in a range, with the sentence that a person reads when it is not one. Both ends are allowed. */
 export function quantity(min: number, max: number, unit = '') {
@@ -26,6 +27,15 @@ export function label(maxLength: number, what = 'text') {
 		.refine((text) => !hasControlCharacters(text), {
 			error: `Take line breaks and control characters out of the ${what}.`
 		});
+}
+
+/** A name that may be left empty. Line breaks and control characters become blanks, outer blanks are taken off. */
+export function optionalLabel(maxLength: number, what = 'name') {
+	return z
+		.string({ error: `Give the ${what} as text.` })
+		.overwrite((text) => [...text].map((each) => (hasControlCharacters(each) ? ' ' : each)).join(''))
+		.trim()
+		.max(maxLength, { error: `Keep the ${what} within ${maxLength} characters.` });
 }
 
 function hasControlCharacters(text: string): boolean {

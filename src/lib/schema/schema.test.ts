@@ -128,6 +128,30 @@ describe('rings', () => {
 	});
 });
 
+describe('refusals', () => {
+	it('say what to give for a field that is missing or of another type', () => {
+		const refused = plotSchema.safeParse({ ...emptyPlot(), boundary: null, obstacles: undefined });
+		expect(fieldErrors(refused.error!)).toEqual([
+			{ path: 'boundary', message: 'Give a list.' },
+			{ path: 'obstacles', message: 'This is missing: give a list.' }
+		]);
+		expect(fieldErrors(plotSchema.safeParse('x').error!)).toEqual([
+			{ path: '', message: 'Give an object with its fields.' }
+		]);
+	});
+});
+
+describe('names of obstacles', () => {
+	it('keep no control characters', () => {
+		const box = { id: 'b', kind: 'box', eastM: 0, northM: 0, sizeXM: 1, sizeYM: 1, heightM: 1, turnDeg: 0 };
+		const named = (name: string) =>
+			plotSchema.parse({ ...emptyPlot(), obstacles: [{ ...box, name }] }).obstacles[0].name;
+		expect(named(' old\u0000barn\n')).toBe('old barn');
+		expect(named('')).toBe('');
+		expect(() => named('x'.repeat(81))).toThrow('Keep the name within 80 characters.');
+	});
+});
+
 describe('versions', () => {
 	it('runs the steps that an older document needs, in order', () => {
 		const steps = [
