@@ -13,7 +13,7 @@ declare global {
 			/** Set when the request came with the sign-in cookie. */
 			sessionId: string | null;
 			/** Set when the request came with a personal token: what it may do. */
-			token: { id: string; scopes: Scope[] } | null;
+			token: { id: string; scopes: Scope[]; expiresAt: Date | null } | null;
 		}
 		interface Error {
 			message: string;

@@ -3,6 +3,7 @@ import { promisify } from 'node:util';
 import { eq } from 'drizzle-orm';
 import { describe, expect, it, vi } from 'vitest';
 import { actions, can, roles } from '$lib/access';
+import { countAttempt } from '$lib/server/auth/attempts';
 import { requestReset } from '$lib/server/auth/request-reset';
 import { closeAllSessions, sessionService } from '$lib/server/auth/session';
 import { resetHolds, setPassword } from '$lib/server/auth/set-password';
@@ -14,6 +15,8 @@ import { newId } from '$lib/server/db/ids';
 import { apiTokens, passwordResets, projects, sessions, signInAttempts, users } from '$lib/server/db/schema';
 import { projectsWhere, requireProject, requireTeam } from '$lib/server/guard';
 import { listLetters } from '$lib/server/mail/list-letters';
+import { invite } from '$lib/server/teams/invite';
+import { callApi, tokenOf } from './helpers/api';
 import { expectRefused, joinProject, joinTeam, makePerson, testPassword } from './helpers/people';
 import { useTemporaryDatabase } from './helpers/temporary-database';
 
@@ -125,6 +128,41 @@ describe('signing in', () => {
 	});
 });
 
+describe('signing in from one host', () => {
+	it('stops a list of addresses at sixty wrong tries, whatever right ones lie between', async () => {
+		const own = await makePerson('Spraying');
+		await db.delete(signInAttempts);
+		for (let i = 0; i < 60; i += 1) {
+			await expectRefused(
+				signIn({ email: `listed-${i}@example.org`, password: 'guess' }, 'host-spray'),
+				'invalid'
+			);
+			if (i % 20 === 10) await signIn({ email: own.email, password: testPassword }, 'host-spray');
+		}
+		await expectRefused(
+			signIn({ email: 'one-more@example.org', password: 'guess' }, 'host-spray'),
+			'too_many'
+		);
+	}, 60_000);
+});
+
+describe('the sign-ins of the demo', () => {
+	it('open nothing on a copy that shows no demo, though the database still holds them', async () => {
+		const email = 'owner@tiltyard.test';
+		process.env.TILTYARD_SEED_DEMO = '1';
+		const { userId } = await signUp(
+			{ name: 'Demo', teamName: 'Demo', email, password: testPassword },
+			'host-demo'
+		);
+		const token = await tokenOf({ userId });
+		expect(await signIn({ email, password: testPassword }, 'host-demo')).toEqual({ userId });
+		expect((await callApi('GET', '/api/v1/me', { token })).status).toBe(200);
+		process.env.TILTYARD_SEED_DEMO = '0';
+		await expectRefused(signIn({ email, password: testPassword }, 'host-demo'), 'invalid');
+		expect((await callApi('GET', '/api/v1/me', { token })).status).toBe(401);
+	});
+});
+
 describe('sessions', () => {
 	it('hold until they are ended', async () => {
 		const person = await makePerson('Sitting');
@@ -208,6 +246,18 @@ describe('a forgotten password', () => {
 	});
 });
 
+describe('invitations', () => {
+	it('go to at most sixty addresses an hour from one person, whatever way they are asked for', async () => {
+		const person = await makePerson('Inviting');
+		const ask = (i: number) =>
+			invite(person, person.teamId, { email: `guest-${i}@example.org`, role: 'designer' }, home);
+		await ask(0);
+		// Fifty-nine more, without their letters.
+		for (let i = 1; i < 60; i += 1) await countAttempt('invite', person.userId);
+		await expectRefused(ask(60), 'too_many');
+	});
+});
+
 describe('roles on a project', () => {
 	it('let through what the table says for every role and action, and tell strangers "not found"', async () => {
 		const owner = await makePerson('Owner');
@@ -280,6 +330,25 @@ describe('personal tokens', () => {
 			.set({ expiresAt: new Date(Date.now() - 1000) })
 			.where(eq(apiTokens.id, made.id));
 		expect(await verifyToken(made.token)).toBeNull();
+	});
+
+	it('that are made with a token end with it at the latest', async () => {
+		const person = await makePerson('Lasting');
+		const made = await createToken(person, { name: 'Short', scopes: ['write'], expiresInDays: 1 });
+		const answer = await callApi('POST', '/api/v1/tokens', {
+			token: made.token,
+			body: { name: 'Long', scopes: ['read', 'write'], expiresInDays: 365 }
+		});
+		expect(answer.status).toBe(201);
+		expect(answer.body.expiresAt).toBe(made.expiresAt);
+	});
+
+	it('are a hundred to a person at most', async () => {
+		const person = await makePerson('Minting');
+		const make = () => createToken(person, { name: 'One of many', scopes: ['read'], expiresInDays: 1 });
+		for (let i = 0; i < 100; i += 1) await make();
+		const refused = await expectRefused(make(), 'conflict');
+		expect(refused.message).toContain('withdraw one first');
 	});
 
 	it('made on the command line are good on the API', async () => {

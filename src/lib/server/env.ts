@@ -1,4 +1,5 @@
 /** The process's settings, read when they are asked for: a test may set them after this module was loaded. */
+import { roles } from '$lib/access';
 
 /** Where the data are; the start, dev and test commands set it. */
 export function databaseUrl(): string {
@@ -13,6 +14,16 @@ export const isLocal = (): boolean => process.env.TILTYARD_LOCAL === '1';
 
 /** Whether the demo is put in when the application starts. */
 export const seedsDemo = (): boolean => process.env.TILTYARD_SEED_DEMO === '1';
+
+/** The sign-ins of the demo, whose password is known. */
+export const demoEmailOf = (role: string): string => `${role}@tiltyard.test`;
+const demoEmails = roles.map(demoEmailOf);
+
+/**
+ * Whether this address is one of the demo's on a copy that shows no demo: a database that once held the demo must not
+ * keep a known password open.
+ */
+export const isRefusedDemo = (email: string): boolean => !seedsDemo() && demoEmails.includes(email);
 
 export const demoPassword = (): string => process.env.DEMO_PASSWORD ?? 'tiltyard-demo';
 

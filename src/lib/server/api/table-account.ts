@@ -32,7 +32,8 @@ export const accountCalls = {
 	createToken: call({
 		method: 'POST',
 		path: '/api/v1/tokens',
-		summary: 'Make a personal token; its text is shown this once',
+		summary:
+			'Make a personal token; its text is shown this once. Made with a token, it ends with that at the latest',
 		tag,
 		body: shapes.newTokenSchema,
 		answer: { status: 201, description: 'The token and its text', schema: shapes.madeTokenSchema }

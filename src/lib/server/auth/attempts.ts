@@ -21,6 +21,8 @@ const limits = {
 	'sign-up': { most: 60, windowMinutes: 60, what: 'sign-ups from your network' },
 	/** Letters to one address. */
 	reset: { most: 4, windowMinutes: 60, what: 'reset letters for this address' },
+	/** Letters to whomever, with words of the sender's own in them. */
+	invite: { most: 60, windowMinutes: 60, what: 'invitations' },
 	'reset-host': { most: 40, windowMinutes: 60, what: 'reset requests from your network' }
 } as const satisfies Record<string, Limit>;
 
@@ -32,8 +34,9 @@ const bucketOf = (kind: Kind, who: string): string =>
 /**
  * Notes one try and refuses it when there were too many. It is noted before anything is checked, so that many
  * tries at the same moment can't slip through together.
+ * @returns the id of this try, for `forgetAttempt`
  */
-export async function countAttempt(kind: Kind, who: string): Promise<void> {
+export async function countAttempt(kind: Kind, who: string): Promise<string> {
 	const { most, windowMinutes, what } = limits[kind];
 	const bucket = bucketOf(kind, who);
 	const now = Date.now();
@@ -46,7 +49,7 @@ export async function countAttempt(kind: Kind, who: string): Promise<void> {
 		.where(and(eq(signInAttempts.bucket, bucket), gt(signInAttempts.at, since)))
 		.orderBy(asc(signInAttempts.at))
 		.limit(most + 1);
-	if (tries.length <= most) return;
+	if (tries.length <= most) return id;
 	// A refused try does not count: who goes on trying is not locked out for longer.
 	await db.delete(signInAttempts).where(eq(signInAttempts.id, id));
 	const seconds = Math.max(1, Math.ceil((tries[0].at.getTime() + windowMinutes * 60_000 - now) / 1000));
@@ -58,7 +61,12 @@ export async function countAttempt(kind: Kind, who: string): Promise<void> {
 	);
 }
 
-/** Forgets the tries after a right one. */
+/** Forgets one try, which was a right one; those before it go on counting. */
+export async function forgetAttempt(id: string): Promise<void> {
+	await db.delete(signInAttempts).where(eq(signInAttempts.id, id));
+}
+
+/** Forgets all tries after a right one. */
 export async function forgiveAttempts(kind: Kind, who: string): Promise<void> {
 	await db.delete(signInAttempts).where(eq(signInAttempts.bucket, bucketOf(kind, who)));
 }

@@ -1,4 +1,5 @@
 import type { RequestEvent } from '@sveltejs/kit';
+import { isRefusedDemo } from '../env';
 import { AppError } from '../errors';
 import { readSession } from './session';
 import { verifyToken } from './tokens';
@@ -13,19 +14,19 @@ export async function authenticate(event: RequestEvent): Promise<void> {
 	if (onApi && authorization !== null) {
 		const token = /^Bearer +(\S+)$/i.exec(authorization)?.[1];
 		const verified = token ? await verifyToken(token) : null;
-		if (!verified)
+		if (!verified || isRefusedDemo(verified.user.email))
 			throw new AppError(
 				'unauthorised',
 				'This token is unknown, withdrawn or expired: make a new one and send it as "Authorization: Bearer …".'
 			);
 		locals.user = verified.user;
 		locals.actor = { userId: verified.user.id };
-		locals.token = { id: verified.tokenId, scopes: verified.scopes };
+		locals.token = { id: verified.tokenId, scopes: verified.scopes, expiresAt: verified.expiresAt };
 		refuseBeyondScope(verified.scopes, request.method, url.pathname);
 		return;
 	}
 	const session = await readSession(event.cookies);
-	if (!session) return;
+	if (!session || isRefusedDemo(session.user.email)) return;
 	locals.user = session.user;
 	locals.actor = { userId: session.user.id };
 	locals.sessionId = session.sessionId;

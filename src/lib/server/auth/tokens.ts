@@ -1,11 +1,11 @@
 /** Personal API tokens: told once, stored as a hash. */
 import { createHash, randomBytes } from 'node:crypto';
-import { and, desc, eq, gt, isNull, lt, or } from 'drizzle-orm';
+import { and, count, desc, eq, gt, isNull, lt, or } from 'drizzle-orm';
 import type { MadeToken, Scope, TokenInfo } from '$lib/schema/account';
 import { db } from '../db';
 import { newId } from '../db/ids';
 import { apiTokens, users } from '../db/schema';
-import { notFound } from '../errors';
+import { AppError, notFound } from '../errors';
 import type { Actor } from './actor';
 import type { SessionUser } from './session';
 
@@ -35,22 +35,45 @@ export interface TokenWish {
 	expiresInDays: number | null;
 }
 
-export async function createToken(actor: Actor, wish: TokenWish): Promise<MadeToken> {
+/** Tokens of one person that hold at a time: each has an allowance of calls of its own. */
+const MAX_TOKENS = 100;
+
+/**
+ * Makes a token and tells its text.
+ * @param latest when it ends at the latest: a token that is made with another one must not outlive that
+ */
+export async function createToken(
+	actor: Actor,
+	wish: TokenWish,
+	latest: Date | null = null
+): Promise<MadeToken> {
 	const token = prefix + newSecret();
 	const createdAt = new Date();
+	await refuseTooMany(actor, createdAt);
+	const wished =
+		wish.expiresInDays === null ? null : new Date(createdAt.getTime() + wish.expiresInDays * 86_400_000);
 	const row = {
 		id: newId(),
 		userId: actor.userId,
 		name: wish.name,
 		tokenHash: hashToken(token),
 		scopes: [...wish.scopes],
-		expiresAt:
-			wish.expiresInDays === null ? null : new Date(createdAt.getTime() + wish.expiresInDays * 86_400_000),
+		expiresAt: latest && (!wished || wished > latest) ? latest : wished,
 		lastUsedAt: null,
 		createdAt
 	};
 	await db.insert(apiTokens).values(row);
 	return { ...describe(row), token };
+}
+
+async function refuseTooMany(actor: Actor, now: Date): Promise<void> {
+	const holding = or(isNull(apiTokens.expiresAt), gt(apiTokens.expiresAt, now));
+	const [{ held }] = await db
+		.select({ held: count() })
+		.from(apiTokens)
+		.where(and(eq(apiTokens.userId, actor.userId), holding));
+	if (held >= MAX_TOKENS)
+		throw new AppError('conflict', `A person keeps at most ${MAX_TOKENS} tokens: withdraw one first.`);
 }
 
 export async function listTokens(actor: Actor): Promise<TokenInfo[]> {
@@ -73,6 +96,7 @@ export interface VerifiedToken {
 	tokenId: string;
 	user: SessionUser;
 	scopes: Scope[];
+	expiresAt: Date | null;
 }
 
 /** Whose token this is; null when it is unknown, withdrawn or expired. Notes its use, at most once a minute. */
@@ -99,5 +123,6 @@ export async function verifyToken(token: string): Promise<VerifiedToken | null> 
 				or(isNull(apiTokens.lastUsedAt), lt(apiTokens.lastUsedAt, new Date(now.getTime() - 60_000)))
 			)
 		);
-	return { tokenId: row.token.id, user: row.user, scopes: row.token.scopes as Scope[] };
+	const { id: tokenId, scopes, expiresAt } = row.token;
+	return { tokenId, user: row.user, scopes: scopes as Scope[], expiresAt };
 }

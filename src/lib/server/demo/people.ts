@@ -5,7 +5,7 @@ import { hashPassword } from '../auth/password';
 import { db } from '../db';
 import { newId } from '../db/ids';
 import { teamMembers, teams, users } from '../db/schema';
-import { demoPassword } from '../env';
+import { demoEmailOf as emailOf, demoPassword } from '../env';
 
 export interface DemoPeople {
 	teamId: string;
@@ -19,8 +19,6 @@ const names: Record<Role, string> = {
 	crew: 'Carla Bergström',
 	client: 'Clemens Aurich'
 };
-
-const emailOf = (role: Role) => `${role}@tiltyard.test`;
 
 /** Makes the four people and their team, or finds those that are there. */
 export async function seedPeople(): Promise<DemoPeople> {

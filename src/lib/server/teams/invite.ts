@@ -2,6 +2,7 @@ import { eq } from 'drizzle-orm';
 import { projectRoles, roleNames, teamWideRoles, type Role } from '$lib/access';
 import type { Invitation } from '$lib/schema/account';
 import type { Actor } from '../auth/actor';
+import { countAttempt } from '../auth/attempts';
 import { hashToken, newSecret } from '../auth/tokens';
 import { db } from '../db';
 import { newId } from '../db/ids';
@@ -33,6 +34,7 @@ export async function invite(
 ): Promise<Invitation> {
 	const projectName = await requireRight(actor, teamId, wish);
 	await requireMail();
+	await countAttempt('invite', actor.userId);
 	const [{ team }] = await db.select({ team: teams.name }).from(teams).where(eq(teams.id, teamId));
 	const [{ host }] = await db.select({ host: users.name }).from(users).where(eq(users.id, actor.userId));
 	const secret = newSecret();

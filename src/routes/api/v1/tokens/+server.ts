@@ -6,6 +6,6 @@ export const GET = endpoint(apiCalls.listTokens, async ({ actor }) =>
 	answer({ items: await listTokens(actor), nextCursor: null })
 );
 
-export const POST = endpoint(apiCalls.createToken, async ({ actor, body }) =>
-	answer(await createToken(actor, body), { status: 201 })
+export const POST = endpoint(apiCalls.createToken, async ({ actor, body, event }) =>
+	answer(await createToken(actor, body, event.locals.token?.expiresAt), { status: 201 })
 );
