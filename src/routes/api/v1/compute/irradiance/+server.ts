@@ -2,6 +2,6 @@ import { answer, endpoint } from '$lib/server/api/endpoint';
 import { apiCalls } from '$lib/server/api/table';
 import { calculate } from '$lib/server/compute/calculate';
 
-export const POST = endpoint(apiCalls.computeIrradiance, async ({ body }) =>
-	answer(await calculate({ kind: 'irradiance', request: body }))
+export const POST = endpoint(apiCalls.computeIrradiance, async ({ actor, body }) =>
+	answer(await calculate(actor, { kind: 'irradiance', request: body }))
 );
