@@ -56,7 +56,7 @@ runMain(async () => {
 				program: bin('vitest'),
 				args: ['run', '--reporter=default', '--reporter=json', `--outputFile.json=${vitestReport}`],
 				reportFile: vitestReport,
-				limitMs: 360_000,
+				limitMs: 1_200_000,
 				count: countVitest
 			})
 		);
@@ -70,7 +70,7 @@ runMain(async () => {
 				args: ['test'],
 				env: { E2E_PORT: String(port), PLAYWRIGHT_JSON_OUTPUT_NAME: playwrightReport },
 				reportFile: playwrightReport,
-				limitMs: 600_000,
+				limitMs: 2_400_000,
 				count: countPlaywright
 			})
 		);
