@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { openDatabase } from './lib/database.mjs';
 import { ensurePackages } from './lib/packages.mjs';
 import { root } from './lib/paths.mjs';
-import { endOnSignal, isPortFree, superviseChild } from './lib/process.mjs';
+import { endOnSignal, superviseChild, whyNoListener } from './lib/process.mjs';
 import { Refusal, runMain, say } from './lib/say.mjs';
 import { appEnvironment, demoLines } from './lib/settings.mjs';
 
@@ -11,10 +11,8 @@ import { appEnvironment, demoLines } from './lib/settings.mjs';
 runMain(async () => {
 	const host = process.env.HOST ?? '127.0.0.1';
 	const port = Number(process.env.PORT ?? 5173);
-	if (!(await isPortFree(host, port)))
-		throw new Refusal(
-			`Port ${port} on ${host} is taken: stop what listens there or set PORT to another one.`
-		);
+	const refused = await whyNoListener(host, port);
+	if (refused) throw new Refusal(refused);
 	ensurePackages();
 	const signals = endOnSignal();
 	const opening = openDatabase();

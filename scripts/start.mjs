@@ -1,7 +1,7 @@
 import { ensureBuild } from './lib/build.mjs';
 import { openDatabase } from './lib/database.mjs';
 import { ensurePackages } from './lib/packages.mjs';
-import { endChild, endOnSignal, isPortFree, superviseChild } from './lib/process.mjs';
+import { endChild, endOnSignal, superviseChild, whyNoListener } from './lib/process.mjs';
 import { Refusal, runMain, say, secondsSince } from './lib/say.mjs';
 import { serveBuild } from './lib/serve.mjs';
 import { appEnvironment, demoAllowed, demoLines, isAtHome } from './lib/settings.mjs';
@@ -15,10 +15,8 @@ runMain(async () => {
 		throw new Refusal(`PORT is "${process.env.PORT}": give a whole number from 1 to 65535.`);
 	const origin =
 		process.env.ORIGIN ?? `http://${host === '0.0.0.0' || host === '::' ? '127.0.0.1' : host}:${port}`;
-	if (!(await isPortFree(host, port)))
-		throw new Refusal(
-			`Port ${port} on ${host} is taken: stop what listens there, or choose another one, for example "PORT=${port + 1} npm start".`
-		);
+	const refused = await whyNoListener(host, port);
+	if (refused) throw new Refusal(refused);
 
 	ensurePackages();
 	const signals = endOnSignal();

@@ -23,12 +23,26 @@ export function freePort() {
 	});
 }
 
-/** Whether a listener could take this address now. */
-export function isPortFree(/** @type {string} */ host, /** @type {number} */ port) {
-	return new Promise((/** @type {(free: boolean) => void} */ resolve) => {
+/**
+ * Whether a listener could take this address now.
+ * @returns {Promise<string | null>} null when it could, else why not and what to do
+ */
+export function whyNoListener(/** @type {string} */ host, /** @type {number} */ port) {
+	return new Promise((resolve) => {
 		const probe = createServer();
-		probe.once('error', () => resolve(false));
-		probe.listen(port, host, () => probe.close(() => resolve(true)));
+		probe.once('error', (/** @type {NodeJS.ErrnoException} */ { code }) => {
+			if (code === 'EADDRINUSE')
+				resolve(
+					`Port ${port} on ${host} is taken: stop what listens there, or choose another one with PORT=${port + 1}.`
+				);
+			else if (code === 'EACCES')
+				resolve(`This user may not listen on port ${port}: choose one above 1023, such as PORT=3000.`);
+			else
+				resolve(
+					`HOST is "${host}" and this machine can't listen there (${code}): leave HOST out for 127.0.0.1.`
+				);
+		});
+		probe.listen(port, host, () => probe.close(() => resolve(null)));
 	});
 }
 
