@@ -265,7 +265,9 @@ describe('DocumentSync', () => {
 		it.changed({ text: 'a' });
 		await vi.advanceTimersByTimeAsync(700);
 		expect(it.kept).toBe(false);
-		expect(it.message).toContain('keep this page open');
+		expect(it.message).toBe(
+			'No connection. This device has no room to keep a copy: keep this page open until it is saved.'
+		);
 		server.reachable = true;
 		it.online();
 		await vi.advanceTimersByTimeAsync(0);

@@ -186,7 +186,7 @@ export class DocumentSync<T> {
 	/** A refused revision may be our own earlier save whose answer was lost: then the contents agree. */
 	async #compare(sent: T): Promise<void> {
 		const stored = await this.#transport.load();
-		if (!stored) this.#retryLater('No connection. Your work is kept on this device and sent later.');
+		if (!stored) this.#retryLater('No connection.');
 		else if (sameData(stored.document, sent)) this.#acknowledge(sent, stored.revision);
 		else if (this.#unanswered.some((earlier) => sameData(stored.document, earlier))) {
 			this.#unanswered = [];
@@ -208,7 +208,7 @@ export class DocumentSync<T> {
 
 	#retryLater(message: string): void {
 		this.state = 'offline';
-		this.message = this.kept ? message : `${noRoom} It is sent as soon as the server can be reached.`;
+		this.message = `${message} ${this.kept ? 'Your work is kept on this device and sent later.' : noRoom}`;
 		this.#schedule(this.#retryMs);
 		this.#retryMs = Math.min(this.#retryMs * 2, longestRetryMs);
 	}

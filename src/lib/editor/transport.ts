@@ -3,7 +3,7 @@ export type SaveOutcome =
 	| { kind: 'saved'; revision: number }
 	/** Somebody else saved first: the revision that was edited is not the current one. */
 	| { kind: 'stale' }
-	/** The server could not be reached, or could not answer properly; trying again later is right. */
+	/** The server could not be reached, or could not answer properly; trying again later is right. The message says why. */
 	| { kind: 'unreachable'; message: string }
 	/** The server will not take this document as it is; trying again unchanged is useless. */
 	| { kind: 'refused'; message: string };
@@ -49,7 +49,7 @@ export function httpTransport<T>(url: string, fetcher: typeof fetch = fetch): Tr
 				// fetch rejects only when no answer came at all: no network, or the server is down.
 				return {
 					kind: 'unreachable',
-					message: 'No connection. Your work is kept on this device and sent later.'
+					message: 'No connection.'
 				};
 			}
 			if (response.ok) {
@@ -58,21 +58,21 @@ export function httpTransport<T>(url: string, fetcher: typeof fetch = fetch): Tr
 				if (typeof answer?.revision === 'number') return { kind: 'saved', revision: answer.revision };
 				return {
 					kind: 'unreachable',
-					message: 'No proper answer came. Your work is kept on this device and sent again.'
+					message: 'No proper answer came.'
 				};
 			}
 			if (response.status === 412) return { kind: 'stale' };
 			if (response.status === 401) {
 				return {
 					kind: 'unreachable',
-					message: 'You are signed out. Your work is kept on this device; sign in again to save it.'
+					message: 'You are signed out: sign in again, in another tab, to save.'
 				};
 			}
 			const message = await readProblem(response);
 			if (response.status >= 500 || response.status === 429) {
 				return {
 					kind: 'unreachable',
-					message: `${message} Your work is kept on this device and sent again.`
+					message
 				};
 			}
 			return { kind: 'refused', message };
