@@ -48,13 +48,35 @@ export function irradiance(request: IrradianceRequest): { skyDiffuse: number } {
 			skyDiffuse: diffuseHorizontal * ((anisotropy * onPlane) / onLevel + (1 - anisotropy) * skyView)
 		};
 	}
-	const k = 1.041 * zenith ** 3;
-	const clearness = ((diffuseHorizontal + Math.max(0, directNormal)) / diffuseHorizontal + k) / (1 + k);
-	const bin = PEREZ_BOUNDS.findIndex((bound) => clearness < bound);
-	const f = PEREZ[bin === -1 ? 7 : bin];
-	const brightness = (diffuseHorizontal * airMass(request.zenithDeg)) / extraterrestrialNormal;
-	const f1 = Math.max(0, f[0] + f[1] * brightness + f[2] * zenith);
-	const f2 = f[3] + f[4] * brightness + f[5] * zenith;
+	const { f1, f2 } = perezBrightening(request);
 	const sky = (1 - f1) * skyView + (f1 * onPlane) / onLevel + f2 * Math.sin(tilt);
 	return { skyDiffuse: Math.max(0, diffuseHorizontal * sky) };
+}
+
+/**
+ * Sky of Perez et al. 1990 for one moment: clearness epsilon and its bin 1..8, brightness Delta with the relative air
+ * mass of Kasten and Young, circumsolar share F1 (not below 0) and horizon share F2. Wants diffuse and extraterrestrial
+ * above 0.
+ */
+export function perezBrightening(
+	request: Pick<
+		IrradianceRequest,
+		'zenithDeg' | 'directNormal' | 'diffuseHorizontal' | 'extraterrestrialNormal'
+	>
+): { clearness: number; bin: number; brightness: number; f1: number; f2: number } {
+	const { directNormal, diffuseHorizontal, extraterrestrialNormal } = request;
+	const zenith = request.zenithDeg * RADIANS_PER_DEGREE;
+	const k = 1.041 * zenith ** 3;
+	const clearness = ((diffuseHorizontal + Math.max(0, directNormal)) / diffuseHorizontal + k) / (1 + k);
+	const below = PEREZ_BOUNDS.findIndex((bound) => clearness < bound);
+	const bin = below === -1 ? 8 : below + 1;
+	const f = PEREZ[bin - 1];
+	const brightness = (diffuseHorizontal * airMass(request.zenithDeg)) / extraterrestrialNormal;
+	return {
+		clearness,
+		bin,
+		brightness,
+		f1: Math.max(0, f[0] + f[1] * brightness + f[2] * zenith),
+		f2: f[3] + f[4] * brightness + f[5] * zenith
+	};
 }
