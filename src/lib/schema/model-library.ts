@@ -2,8 +2,8 @@ import type { TrackerModel } from '../core/document';
 
 /**
  * Tracker models that every team starts with. Invented machines with invented names, made after common
- * proportions (common practice, no source): tilt axis high enough for about 0.6 m under the lowest corner, stops that
- * let sunrise to sunset through at middle latitudes, modules of 2.0 x 1.0 m lying with the long side level.
+ * proportions (common practice, no source): tilt axis high enough for 0.7 to 1.05 m under the lowest corner on level ground,
+ * and for 0.5 m on ground that rises 9 %; stops that let sunrise to sunset through at middle latitudes, modules of 2.0 x 1.0 m lying with the long side level.
  */
 export const modelLibrary: readonly TrackerModel[] = [
 	{
@@ -13,7 +13,7 @@ export const modelLibrary: readonly TrackerModel[] = [
 		heightM: 3,
 		frameMarginM: 0.03,
 		centreGapM: 0,
-		axisHeightM: 2.1,
+		axisHeightM: 2.2,
 		tiltAxisOffsetM: 0.1,
 		tableOffsetM: 0.08,
 		centreShiftM: 0,
@@ -37,7 +37,7 @@ export const modelLibrary: readonly TrackerModel[] = [
 		heightM: 4,
 		frameMarginM: 0.05,
 		centreGapM: 0,
-		axisHeightM: 2.6,
+		axisHeightM: 2.8,
 		tiltAxisOffsetM: 0.15,
 		tableOffsetM: 0.12,
 		centreShiftM: 0,
@@ -61,7 +61,7 @@ export const modelLibrary: readonly TrackerModel[] = [
 		heightM: 5,
 		frameMarginM: 0.06,
 		centreGapM: 0.3,
-		axisHeightM: 3.2,
+		axisHeightM: 3.4,
 		tiltAxisOffsetM: 0.22,
 		tableOffsetM: 0.18,
 		centreShiftM: 0,
@@ -85,7 +85,7 @@ export const modelLibrary: readonly TrackerModel[] = [
 		heightM: 6,
 		frameMarginM: 0.08,
 		centreGapM: 0,
-		axisHeightM: 3.7,
+		axisHeightM: 3.9,
 		tiltAxisOffsetM: 0.3,
 		tableOffsetM: 0.25,
 		centreShiftM: 0.1,
@@ -109,7 +109,7 @@ export const modelLibrary: readonly TrackerModel[] = [
 		heightM: 6,
 		frameMarginM: 0.08,
 		centreGapM: 0,
-		axisHeightM: 3.7,
+		axisHeightM: 3.9,
 		tiltAxisOffsetM: 0.3,
 		tableOffsetM: 0.25,
 		centreShiftM: 0.1,

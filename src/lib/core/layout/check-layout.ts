@@ -14,10 +14,14 @@ export interface Finding {
 	message: string;
 	/** How much is missing or overlaps, metres. */
 	amountM?: number;
+	/** Least axis height, in steps of 5 cm, that puts low corners right; metres above ground. */
+	clearAxisM?: number;
 }
 
 /** A corner below this height above ground is reported, metres: common practice, no source. */
 export const LOW_CORNER_M = 0.5;
+/** Axis heights are named in steps of this, metres. */
+const AXIS_STEP_M = 0.05;
 /** Contacts within a millimetre are not findings: points come from grids with rounding. */
 const SLACK_M = 0.001;
 
@@ -161,14 +165,20 @@ function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
 		const lowest = lowestCornerM(model, axisM, gradient);
 		if (lowest >= LOW_CORNER_M - SLACK_M) continue;
 		const who = `${model.name}, axis at ${metres(axisM)}`;
+		// The corner rises with the axis, metre for metre.
+		const clearAxisM = Number(
+			(Math.ceil((axisM + LOW_CORNER_M - SLACK_M - lowest) / AXIS_STEP_M) * AXIS_STEP_M).toFixed(2)
+		);
+		const remedy = `raise the axis to ${metres(clearAxisM)}.`;
 		findings.push({
 			kind: 'low-corner',
 			trackerIds: ids,
 			message:
 				lowest < 0
-					? `${who}: its lowest corner would run ${metres(-lowest)} into the ground.`
-					: `${who}: its lowest corner comes down to ${metres(lowest)} above ground; ${metres(LOW_CORNER_M)} is common.`,
-			amountM: LOW_CORNER_M - lowest
+					? `${who}: its lowest corner would run ${metres(-lowest)} into the ground; ${remedy}`
+					: `${who}: its lowest corner comes down to ${metres(lowest)} above ground, where ${metres(LOW_CORNER_M)} is common; ${remedy}`,
+			amountM: LOW_CORNER_M - lowest,
+			clearAxisM
 		});
 	}
 	return findings;

@@ -124,7 +124,23 @@ describe('rows and tags', () => {
 		];
 		expect(nextTags([], points)).toEqual(['B02', 'A01', 'A02', 'B01']);
 		expect(nextTags(['C07', 'gate'], points)).toEqual(['E02', 'D01', 'D02', 'E01']);
-		expect([0, 25, 26, 51, 52, 701, 702].map(rowLetters)).toEqual(['A', 'Z', 'AA', 'AZ', 'BA', 'ZZ', 'AAA']);
+		expect([0, 23, 24, 47, 48, 599, 600].map(rowLetters)).toEqual(['A', 'Z', 'AA', 'AZ', 'BA', 'ZZ', 'AAA']);
+	});
+});
+
+describe('row letters', () => {
+	it('pass over I and O, which read as 1 and 0', () => {
+		const letters = Array.from({ length: 700 }, (_, index) => rowLetters(index));
+		expect(letters.slice(7, 15).join('')).toBe('HJKLMNPQ');
+		expect(letters.filter((row) => /[IO]/.test(row))).toEqual([]);
+		expect(new Set(letters).size).toBe(700);
+	});
+
+	it('go on after a row that was lettered I or O by hand, and after two letters', () => {
+		expect(nextTags(['I03'], [[0, 0]])).toEqual(['J01']);
+		expect(nextTags(['O01'], [[0, 0]])).toEqual(['P01']);
+		expect(nextTags(['Z09'], [[0, 0]])).toEqual(['AA01']);
+		expect(nextTags(['AH02'], [[0, 0]])).toEqual(['AJ01']);
 	});
 });
 
@@ -165,6 +181,24 @@ describe('checking a layout', () => {
 			'no-boundary',
 			'low-corner'
 		]);
+	});
+
+	it('names the axis height that clears low corners, and that height does', () => {
+		const low = testModel({ axisHeightM: 2.2 });
+		const plot = testPlot({ ground: { kind: 'plane', heightM: 0, risePercent: 9, riseTowardsDeg: 90 } });
+		const layout = testLayout([testTracker(0, 0, 0), testTracker(1, 20, 0)], [low]);
+		const cornerOf = (axisHeightM: number | null) =>
+			checkLayout(plot, {
+				...layout,
+				trackers: layout.trackers.map((tracker) => ({ ...tracker, axisHeightM }))
+			}).find((finding) => finding.kind === 'low-corner');
+		const finding = cornerOf(null);
+		const clearing = finding?.clearAxisM ?? NaN;
+		expect(finding?.trackerIds).toEqual(['t0', 't1']);
+		expect(finding?.message).toContain(`raise the axis to ${clearing.toFixed(2)} m`);
+		expect(cornerOf(clearing)).toBeUndefined();
+		// In steps of five centimetres: the step below does not clear.
+		expect(cornerOf(clearing - 0.05)).toBeDefined();
 	});
 
 	it('agrees with asking every pair and every edge', () => {

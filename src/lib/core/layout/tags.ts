@@ -1,20 +1,27 @@
 import { RADIANS_PER_DEGREE } from '../conventions';
 import type { PlanPoint } from '../document';
 
-/** Row letters: 0 is A, 25 is Z, 26 is AA. */
+/** Letters of rows: no I and no O, which a number beside them turns into 1 and 0. */
+const ROW_ALPHABET = 'ABCDEFGHJKLMNPQRSTUVWXYZ';
+
+/** Row letters: 0 is A, 23 is Z, 24 is AA; I and O are passed over. */
 export function rowLetters(index: number): string {
 	let rest = index;
 	let letters = '';
 	do {
-		letters = String.fromCharCode(65 + (rest % 26)) + letters;
-		rest = Math.floor(rest / 26) - 1;
+		letters = ROW_ALPHABET[rest % ROW_ALPHABET.length] + letters;
+		rest = Math.floor(rest / ROW_ALPHABET.length) - 1;
 	} while (rest >= 0);
 	return letters;
 }
 
+/** Place of row letters in their order; a letter that is passed over (typed by hand) counts as the one before it. */
 function rowIndex(letters: string): number {
 	let index = 0;
-	for (const letter of letters) index = index * 26 + (letter.charCodeAt(0) - 64);
+	for (const letter of letters) {
+		const place = [...ROW_ALPHABET].filter((known) => known <= letter).length;
+		index = index * ROW_ALPHABET.length + place;
+	}
 	return index - 1;
 }
 
