@@ -2,5 +2,7 @@
 export * from './area-sentence';
 export * from './plan-projection';
 export * from './read-boundary';
+export * from './read-kind';
 export * from './read-skyline';
 export * from './read-text';
+export * from './weather';

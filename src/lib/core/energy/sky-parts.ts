@@ -1,5 +1,5 @@
-import { RADIANS_PER_DEGREE, sunVector, tableAxes, type SunDirection } from '../conventions';
-import { irradiance, perezBrightening, type IrradianceRequest } from './irradiance';
+import { RADIANS_PER_DEGREE, type SunDirection } from '../conventions';
+import { perezBrightening, type IrradianceRequest } from './irradiance';
 
 export type SkyModel = 'isotropic' | 'hay-davies' | 'hdkr' | 'perez';
 
@@ -15,9 +15,10 @@ export interface SkyParts {
 
 /** Cosine of the angle between the sun and the normal of a plane that faces an azimuth; below 0 the sun is behind. */
 export function incidenceCosine(azimuthDeg: number, tiltDeg: number, sun: SunDirection): number {
-	const { n } = tableAxes(azimuthDeg, tiltDeg);
-	const s = sunVector(sun.azimuthDeg, sun.elevationDeg);
-	return n[0] * s[0] + n[1] * s[1] + n[2] * s[2];
+	const tilt = tiltDeg * RADIANS_PER_DEGREE;
+	const elevation = sun.elevationDeg * RADIANS_PER_DEGREE;
+	const turn = (sun.azimuthDeg - azimuthDeg) * RADIANS_PER_DEGREE;
+	return Math.sin(elevation) * Math.cos(tilt) + Math.cos(elevation) * Math.sin(tilt) * Math.cos(turn);
 }
 
 /**
@@ -44,9 +45,9 @@ export function skyParts(request: Omit<IrradianceRequest, 'model'> & { model: Sk
 	}
 	const anisotropy = Math.min(1, Math.max(0, directNormal / extraterrestrialNormal));
 	const isotropic = diffuseHorizontal * (1 - anisotropy) * skyView;
-	const whole = irradiance({ ...request, model: 'hay-davies' }).skyDiffuse;
+	const circumsolar = diffuseHorizontal * anisotropy * circumsolarRatio(request);
 	const horizon = request.model === 'hdkr' ? isotropic * horizonFactor(request) : 0;
-	return { circumsolar: Math.max(0, whole - isotropic), isotropic, horizon };
+	return { circumsolar, isotropic, horizon };
 }
 
 /** cos of incidence over cos of zenith, the zenith held at 85 degrees: as in `irradiance`. */

@@ -46,8 +46,12 @@ export function trackingGain(weather: WeatherYear, options: GainOptions): Tracki
 	const fixedAzimuthDeg = options.fixedAzimuthDeg ?? (weather.place.latitudeDeg < 0 ? 0 : 180);
 	const sumOf = (light: (hour: LightHour) => number) =>
 		hours.reduce((sum, hour) => sum + light(hour), 0) / 1000;
+	const planes = hours.map((hour) => ({ ...hour, azimuthDeg: fixedAzimuthDeg, tiltDeg: 0, albedo, model }));
 	const fixedAt = (tiltDeg: number) =>
-		sumOf((hour) => planeOfArray({ ...hour, azimuthDeg: fixedAzimuthDeg, tiltDeg, albedo, model }).total);
+		planes.reduce((sum, plane) => {
+			plane.tiltDeg = tiltDeg;
+			return sum + planeOfArray(plane).total;
+		}, 0) / 1000;
 	const fixedTiltDeg = options.fixedTiltDeg ?? bestTiltDeg(fixedAt);
 	const horizontalKwhM2 = sumOf((hour) => hour.globalHorizontal);
 	const fixedKwhM2 = fixedAt(fixedTiltDeg);
