@@ -18,6 +18,7 @@ export * from './layout/check-layout';
 export * from './layout/ground-cover';
 export * from './field';
 export * from './scene';
+export { treeHeightM } from './shade/solid';
 export * from './energy/beam';
 export * from './energy/irradiance';
 export * from './energy/extraterrestrial';

@@ -5,3 +5,4 @@ export { planSheets } from './plan-sheets';
 export { sheetToSvg } from './to-svg';
 export { sheetsToPdf, type PdfFacts } from './to-pdf';
 export { checkSums } from './check-sums';
+export { grownTreesInWords, treesInWords } from './tree-years';

@@ -1,5 +1,6 @@
 import type { PaperRect } from './drawing';
 import type { Pen } from './pen';
+import { upperSpace } from './sheet-frame';
 import { sheetColours as c } from './sheet-colours';
 import { cutToWidth } from './text-fit';
 
@@ -19,13 +20,37 @@ export function rowsThatFit(heightMm: number): number {
 	return Math.max(1, Math.floor((heightMm - HEAD_MM) / ROW_MM));
 }
 
-/** A ruled list with a head; text that is too wide ends in an ellipsis. */
+/** Space for the title over a list that has its sheet to itself. */
+export const LIST_TOP_MM = 11;
+
+/** Title of a list that has its sheet to itself, with a note at the right. */
+export function listTitle(pen: Pen, text: string, note: string): void {
+	pen.text('words', [upperSpace.xMm + 5, upperSpace.yMm + 7.6], text, { capMm: 3.4, weight: 800 });
+	pen.text('words', [upperSpace.xMm + 385, upperSpace.yMm + 7.6], note, {
+		capMm: 2.2,
+		anchor: 'end',
+		colour: c.inkSoft
+	});
+}
+
+/** Rows by the sheets that they need. */
+export function pagesOf<T>(items: T[], size: number): T[][] {
+	const pages: T[][] = [];
+	for (let i = 0; i < items.length; i += size) pages.push(items.slice(i, i + size));
+	return pages;
+}
+
+/**
+ * A ruled list with a head; text that is too wide ends in an ellipsis.
+ * @param shaded which rows lie on a tint; every second one when not told
+ */
 export function drawList(
 	pen: Pen,
 	area: PaperRect,
 	columns: ListColumn[],
 	rows: string[][],
-	capMm = 2
+	capMm = 2,
+	shaded: (row: number) => boolean = (row) => row % 2 === 1
 ): void {
 	const { xMm: x, yMm: y } = area;
 	const width = columns.reduce((sum, column) => sum + column.widthMm, 0);
@@ -56,7 +81,7 @@ export function drawList(
 	}
 	rows.forEach((cells, i) => {
 		const top = y + HEAD_MM + i * ROW_MM;
-		if (i % 2) {
+		if (shaded(i)) {
 			pen.rect(
 				'table',
 				{ xMm: x, yMm: top, widthMm: width, heightMm: ROW_MM },

@@ -1,14 +1,14 @@
 import type { Mount, TrackerModel } from '../core';
-import { formatBearing, formatNumber } from '../i18n';
+import { formatNumber } from '../i18n';
 import { mountCautions } from './cautions';
 import { dimensionAcross, dimensionDown } from './dimension';
 import type { PaperPoint, PaperRect } from './drawing';
-import { drawList, rowsThatFit, type ListColumn } from './list-sheet';
 import { chooseReduction } from './map-scale';
+import { drawExceptions, exceptionSheets } from './mount-exceptions';
+import { drawStopsAndPostures } from './mount-postures';
 import { millimetres, mountDimensions, type MountDimensions } from './mount-words';
 import type { Pen } from './pen';
 import type { PlanContent } from './plan-content';
-import { drawStops } from './stops-picture';
 import { framedSheet, footStrip } from './sheet-frame';
 import { sheetColours as c } from './sheet-colours';
 import type { SheetBuilder } from './site-sheets';
@@ -16,20 +16,28 @@ import type { SheetBuilder } from './site-sheets';
 const frontSpace: PaperRect = { xMm: 30, yMm: 40, widthMm: 202, heightMm: 180 };
 const LARGEST_REDUCTION = 5;
 
-/** One mount drawing for each tracker model in use: the field's common place on that model's table. */
+/**
+ * One mount drawing for each tracker model in use: the field's common place on that model's table. Trackers with their
+ * own place that find no room on it follow on sheets of their own.
+ */
 export function mountSheets(content: PlanContent): SheetBuilder[] {
 	const used = new Set(content.rows.map((row) => row.modelId));
 	const models = content.layout.models.filter((model) => used.has(model.id));
-	return models.map((model) => (place) => mountSheet(content, model, models.length > 1, place));
+	return models.flatMap((model) => {
+		const name = models.length > 1 ? `Sensor mount on ${model.name}` : 'Sensor mount';
+		return [
+			(place) => mountSheet(content, model, name, place),
+			...exceptionSheets(content, model, name)
+		] satisfies SheetBuilder[];
+	});
 }
 
 function mountSheet(
 	content: PlanContent,
 	model: TrackerModel,
-	several: boolean,
+	name: string,
 	place: Parameters<SheetBuilder>[0]
 ) {
-	const name = several ? `Sensor mount on ${model.name}` : 'Sensor mount';
 	const { common } = content.layout.mounts;
 	const reduction = chooseReduction([model.widthM, model.heightM], [168, 118], LARGEST_REDUCTION);
 	const scale = `1:${reduction}`;
@@ -66,8 +74,12 @@ function mountSheet(
 			});
 		}
 		drawSide(pen, common, model);
-		drawExceptions(pen, content, model);
-		drawStopsAndPostures(pen, model);
+		drawExceptions(pen, content, model, place.number + 1);
+		drawStopsAndPostures(
+			pen,
+			model,
+			content.rows.filter((row) => row.modelId === model.id)
+		);
 		drawMountFoot(pen, d);
 	});
 }
@@ -201,7 +213,12 @@ function drawSide(pen: Pen, mount: Mount | null, model: TrackerModel): void {
 	pen.circle('table', head, 2.2, { fill: { colour: c.sun }, stroke: { colour: c.ink, widthMm: 0.35 } });
 	pen.line('table', [head[0] + 3, head[1]], [head[0] + 14, head[1]], { colour: c.sun, widthMm: 0.35 });
 	pen.arrowHead('table', [head[0] + 16, head[1]], 90, 3, c.sun);
-	pen.text('words', [head[0] + 17.5, head[1] + 0.9], 'looks square off the glass', { colour: c.inkSoft });
+	// Over its arrow and ending with it, so that it keeps off the list on the right.
+	pen.text('words', [head[0] + 16, head[1] - 3.6], 'looks square off the glass', {
+		colour: c.inkSoft,
+		anchor: 'end',
+		halo: c.white
+	});
 	dimensionDown(
 		pen,
 		[glassX - 2, edgeY],
@@ -223,78 +240,6 @@ function drawSide(pen: Pen, mount: Mount | null, model: TrackerModel): void {
 		`Lead as made: ${formatNumber(model.sensorLeadM, 1)} m`
 	];
 	words.forEach((line, i) => pen.text('words', [x, y + 93 + i * 4], line, { capMm: 2 }));
-}
-
-const exceptionColumns: ListColumn[] = [
-	{ head: 'Tag', widthMm: 18, align: 'left' },
-	{ head: 'Edge', widthMm: 15, align: 'left' },
-	{ head: 'Side', widthMm: 12, align: 'left' },
-	{ head: 'from side', widthMm: 17, align: 'right' },
-	{ head: 'from top', widthMm: 17, align: 'right' },
-	{ head: 'out', widthMm: 13, align: 'right' },
-	{ head: 'ahead', widthMm: 13, align: 'right' }
-];
-
-/** Trackers of this model that have their own place. */
-function drawExceptions(pen: Pen, content: PlanContent, model: TrackerModel): void {
-	const x = 300;
-	const y = 30;
-	pen.text('words', [x, y], 'Exceptions', { capMm: 2.6, weight: 800 });
-	const own = content.rows.filter((row) => row.ownMount && row.modelId === model.id);
-	if (own.length === 0) {
-		pen.paragraph(
-			'words',
-			[x, y + 2.4],
-			104,
-			content.layout.mounts.common ? 'None: this place is for every tracker of this model.' : 'None listed.'
-		);
-		return;
-	}
-	const room = rowsThatFit(76);
-	const shown = own.slice(0, own.length > room ? room - 1 : room);
-	const rows = shown.map((row) => {
-		const d = mountDimensions(row.mount as Mount, model);
-		return [
-			row.tag,
-			d.edge,
-			d.side,
-			millimetres(d.fromSideM),
-			millimetres(d.fromTopM),
-			millimetres(d.outM),
-			millimetres(d.forwardM)
-		];
-	});
-	if (own.length > shown.length) rows.push(['…', `${own.length - shown.length}`, 'more', 'see table']);
-	drawList(pen, { xMm: x, yMm: y + 3, widthMm: 105, heightMm: 76 }, exceptionColumns, rows);
-}
-
-function drawStopsAndPostures(pen: Pen, model: TrackerModel): void {
-	const x = 300;
-	const y = 126;
-	pen.text('words', [x, y], 'Azimuth stops and postures', { capMm: 2.6, weight: 800 });
-	drawStops(pen, [x + 26, y + 32], 22, model.stops);
-	const night =
-		model.night.azimuthDeg === null
-			? `tilt ${formatNumber(model.night.tiltDeg)}°, bearing kept`
-			: `tilt ${formatNumber(model.night.tiltDeg)}°, facing ${formatBearing(model.night.azimuthDeg)}`;
-	[
-		['Tracker model', model.name],
-		['Axis height', `${formatNumber(model.axisHeightM, 2)} m above ground`],
-		['Tilt range', `${formatNumber(model.minTiltDeg)}° to ${formatNumber(model.maxTiltDeg)}°`],
-		['Night posture', night],
-		['Wind posture', `tilt ${formatNumber(model.windTiltDeg)}°`],
-		['Slew', `${formatNumber(model.slewDegPerS, 2)}° a second`]
-	].forEach(([label, value], i) => {
-		pen.text('words', [x + 56, y + 8 + i * 8], label, { colour: c.inkSoft });
-		pen.text('words', [x + 56, y + 11.4 + i * 8], value, { capMm: 2, weight: 600 });
-	});
-	pen.paragraph(
-		'words',
-		[x, y + 60],
-		104,
-		'Bearings clockwise from true north. The table may face any bearing of the shaded arc. Set stops by survey or sun shadow, never by a compass near steel. Wind settings are the maker’s and the engineer’s.',
-		{ colour: c.inkSoft }
-	);
 }
 
 function drawMountFoot(pen: Pen, d: MountDimensions | null): void {

@@ -23,6 +23,8 @@ export interface PlanHeading {
 	coreVersion: string;
 	/** The shade run that the layout was judged by, in words; null when there is none. */
 	shadeNote: string | null;
+	/** Years that the trees of that run have grown since today; null when no shade run stands behind the layout. */
+	treeYears: number | null;
 }
 
 /** Everything that a plan's sheets are drawn from; frozen with the plan when it is issued. */

@@ -1,6 +1,8 @@
 import type { Sheet } from './drawing';
-import { coordinateSheets, obstacleSheets, openPointSheets } from './coordinate-sheets';
+import { coordinateSheets } from './coordinate-sheets';
 import { mountSheets } from './mount-sheets';
+import { obstacleSheets } from './obstacle-sheets';
+import { openPointSheets } from './open-point-sheets';
 import type { PlanContent } from './plan-content';
 import { siteSheets } from './site-sheets';
 

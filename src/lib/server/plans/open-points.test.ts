@@ -59,7 +59,13 @@ const done = (over: Partial<Run> = {}): Run => ({
 	outOfDate: false,
 	...over
 });
-const settled = { shade: done(), mounts: done({ kind: 'mounts' }), verdict: null, choiceStands: true };
+const settled = {
+	shade: done(),
+	mounts: done({ kind: 'mounts' }),
+	verdict: null,
+	mountResult: null,
+	choiceStands: true
+};
 
 describe('open points before issue', () => {
 	it('are none when layout, runs and mount are settled', () => {
@@ -110,6 +116,6 @@ describe('open points before issue', () => {
 			}
 		);
 		expect(points.some((point) => point.includes('A01 and A02') && point.includes('overlap'))).toBe(true);
-		expect(points).toContain('The winter rule is not met: A01 breaks it.');
+		expect(points).toContain('The winter rule is not met: 1 tracker breaks it: A01.');
 	});
 });

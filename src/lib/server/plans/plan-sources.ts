@@ -1,16 +1,16 @@
 import { desc, eq } from 'drizzle-orm';
 import { CORE_VERSION, type Layout, type Place, type Plot, type ShadeResult } from '$lib/core';
 import { pegRows } from '$lib/exchange/peg-csv-rows';
-import { formatDay, formatNumber, formatPercent, isoDateAt } from '$lib/i18n';
+import { formatDay, formatPercent, isoDateAt } from '$lib/i18n';
 import type { Run } from '$lib/schema/run';
-import type { PlanContent } from '$lib/sheets';
+import { grownTreesInWords, type PlanContent } from '$lib/sheets';
 import type { Actor } from '../auth/actor';
 import { db } from '../db';
 import { layouts, plans, projects, teams } from '../db/schema';
 import { notFound } from '../errors';
 import { requireProject } from '../guard';
 import { currentSources } from '../runs/current-input';
-import { getShadeResult } from '../runs/get-run-result';
+import { getMountResult, getShadeResult } from '../runs/get-run-result';
 import { isMountRunOf } from '../runs/is-mount-run-of';
 import { latestRun } from '../runs/latest-run';
 import { openPoints } from './open-points';
@@ -31,6 +31,8 @@ export interface PlanSources {
 	lastRevision: string | null;
 	openPoints: string[];
 	shadeNote: string | null;
+	/** Years that the trees of the shade run have grown; null without a run that stands. */
+	treeYears: number | null;
 	runs: { shade: Run | null; mounts: Run | null };
 }
 
@@ -50,8 +52,9 @@ export async function planSources(actor: Actor, projectId: string, layoutId: str
 		shade: await latestRun(actor, layoutId, 'shade'),
 		mounts: await latestRun(actor, layoutId, 'mounts')
 	};
-	const usable = runs.shade?.status === 'done' && !runs.shade.outOfDate ? runs.shade : null;
+	const usable = standing(runs.shade);
 	const result = usable ? await getShadeResult(actor, usable.id) : null;
+	const mountRun = standing(runs.mounts);
 	return {
 		place,
 		plot,
@@ -66,9 +69,11 @@ export async function planSources(actor: Actor, projectId: string, layoutId: str
 		openPoints: openPoints(plot, layout, {
 			...runs,
 			verdict: result?.winterRule ?? null,
+			mountResult: mountRun ? await getMountResult(actor, mountRun.id) : null,
 			choiceStands: await isMountRunOf(projectId, layoutId, layout.mounts.fromRunId)
 		}),
-		shadeNote: usable && result ? shadeNote(usable, result, place) : null,
+		shadeNote: usable && result ? shadeNote(usable, result, place, plot) : null,
+		treeYears: usable?.treeYears ?? null,
 		runs
 	};
 }
@@ -83,13 +88,19 @@ export async function lastRevision(projectId: string): Promise<string | null> {
 	return last?.revision ?? null;
 }
 
-function shadeNote(run: Run, result: ShadeResult, place: Place): string {
+/** A finished run of what the layout and its plot are now. */
+function standing(run: Run | null): Run | null {
+	return run?.status === 'done' && !run.outOfDate ? run : null;
+}
+
+function shadeNote(run: Run, result: ShadeResult, place: Place, plot: Plot): string {
 	const day = formatDay(isoDateAt(Date.parse(run.finishedAt ?? run.createdAt), place.timeZone), true);
 	const { met, judgedMinutes } = result.winterRule;
 	const rule = !met ? 'not met' : judgedMinutes === 0 ? 'not put to the test' : 'met';
-	const trees = run.treeYears > 0 ? `, trees after ${formatNumber(run.treeYears)} years` : '';
+	const grown = grownTreesInWords(plot.obstacles, run.treeYears);
+	const trees = grown ? `, computed with ${grown}` : '';
 	const loss = formatPercent(result.field.beamLoss, 1);
-	return `Shade run of ${day} for the year ${run.year}${trees}: beam loss by shade ${loss}, winter rule ${rule}.`;
+	return `Shade run of ${day} for the year ${run.year}${trees}. Beam loss by shade ${loss}, winter rule ${rule}.`;
 }
 
 /** The content of a plan's sheets; without `issued` it is a draft. */
@@ -111,7 +122,8 @@ export function planContent(
 			issued: facts.issued,
 			reason: facts.reason,
 			coreVersion: CORE_VERSION,
-			shadeNote: sources.shadeNote
+			shadeNote: sources.shadeNote,
+			treeYears: sources.treeYears
 		},
 		place,
 		plot,
