@@ -13,7 +13,12 @@ export async function migrateDatabase(url) {
 	]);
 	const connection = await createConnection({ uri: url });
 	try {
-		await connection.query("SELECT GET_LOCK('tiltyard-migrate', 60)");
+		const [rows] = await connection.query("SELECT GET_LOCK('tiltyard-migrate', 60) AS got");
+		const [{ got }] = /** @type {{ got: number | null }[]} */ (rows);
+		if (got !== 1)
+			throw new Error(
+				'Another process has been migrating this database for a minute. Try again when it is done.'
+			);
 		await migrate(drizzle({ client: connection }), { migrationsFolder: join(root, 'drizzle') });
 	} finally {
 		await connection.end();
