@@ -58,6 +58,11 @@ const tree = {
 
 const refusals: [name: string, document: () => unknown, errorPath: string][] = [
 	['crosses itself', () => withOutline(bow), 'document.boundary.0.outer'],
+	[
+		'holds land twice',
+		() => ({ ...squarePlot(), boundary: [...squarePlot().boundary, ...squarePlot().boundary] }),
+		'document.boundary.1'
+	],
 	['has two corners', () => withOutline(bow.slice(0, 2)), 'document.boundary.0.outer'],
 	['has no area', () => withOutline([[0, 0], [10, 0], [20, 0]]), 'document.boundary.0.outer'], // prettier-ignore
 	['has a corner without a number', () => withOutline([[0, 0], [10, null], [20, 9]]), 'document.boundary.0.outer.1.1'], // prettier-ignore

@@ -1,4 +1,5 @@
 import type { BoundaryPart, PlanPoint, Plot } from '$lib/core';
+import { overlapProblem } from '$lib/schema/part-overlaps';
 import { ringProblems, ringProblemSentence, signedDoubleArea, strayHole } from '$lib/schema/plot-checks';
 
 /** One corner of the boundary: part, ring (0 is the outline, n is hole n) and place in the ring. */
@@ -75,7 +76,7 @@ export function boundaryProblem(boundary: readonly BoundaryPart[]): string | nul
 			return `${ringLabel(boundary, index, stray)} does not lie inside the outline: move its corners in or take it out.`;
 		}
 	}
-	return null;
+	return overlapProblem(boundary)?.message ?? null;
 }
 
 /** A drawn ring as a part of the boundary. */

@@ -1,5 +1,6 @@
 import { and, eq, lte, sql } from 'drizzle-orm';
 import type { Plot } from '$lib/core/document';
+import { overlapProblem } from '$lib/schema/part-overlaps';
 import { turnedBoundary } from '$lib/schema/ring';
 import type { Actor } from '../auth/actor';
 import { db } from '../db';
@@ -19,6 +20,14 @@ export async function savePlot(
 	onRevision: number
 ): Promise<{ revision: number; updatedAt: string }> {
 	await requireProject(actor, projectId, 'plot.edit');
+	// Not part of the shape: plots that are stored already must stay readable.
+	const overlap = overlapProblem(document.boundary);
+	if (overlap) {
+		const path = ['document', 'boundary', ...overlap.path].join('.');
+		throw new AppError('invalid', 'Land of the boundary is drawn twice.', {
+			errors: [{ path, message: overlap.message }]
+		});
+	}
 	const plot = { ...document, boundary: turnedBoundary(document.boundary) };
 	const now = new Date();
 	const revision = onRevision + 1;
