@@ -1,11 +1,12 @@
-import type { Ground, Obstacle, PlanPoint, Plot } from '../core';
+import type { Obstacle, PlanPoint, Plot } from '../core';
 import { formatNumber } from '../i18n';
 import type { PegRow } from '../schema/peg-row';
 import type { PaperPoint } from './drawing';
 import { insetLines } from './inset-lines';
 import type { Extent, MapFrame } from './map-scale';
 import type { Pen } from './pen';
-import type { PlacedTag } from './place-tags';
+import type { Segment } from './paper-boxes';
+import type { PlacedTag, TagHindrances } from './place-tags';
 import { sheetColours as c } from './sheet-colours';
 import { simplifyRing } from './simplify-ring';
 
@@ -24,58 +25,6 @@ export const mapStrokes = {
 /** Corners that deviate less than this on the paper are not drawn. */
 const DRAWN_MM = 0.04;
 const CROSS_ARM_MM = 1.2;
-
-export function drawGround(pen: Pen, ground: Ground, map: MapFrame): void {
-	if (ground.kind !== 'plane' || ground.risePercent <= 0) return;
-	const a = (ground.riseTowardsDeg * Math.PI) / 180;
-	const gradient = ground.risePercent / 100;
-	const intervalM = contourIntervalM(ground.risePercent, map.mmPerM);
-	const { minEastM, maxEastM, minNorthM, maxNorthM } = map.shown;
-	const corners: PlanPoint[] = [
-		[minEastM, minNorthM],
-		[maxEastM, minNorthM],
-		[maxEastM, maxNorthM],
-		[minEastM, maxNorthM]
-	];
-	const levels = corners.map(([e, n]) => ground.heightM + gradient * (e * Math.sin(a) + n * Math.cos(a)));
-	const reachM = Math.hypot(maxEastM - minEastM, maxNorthM - minNorthM);
-	const middle: PlanPoint = [(minEastM + maxEastM) / 2, (minNorthM + maxNorthM) / 2];
-	const first = Math.ceil(Math.min(...levels) / intervalM);
-	for (let i = first; i * intervalM <= Math.max(...levels); i += 1) {
-		const level = i * intervalM;
-		const along = middle[0] * Math.cos(a) - middle[1] * Math.sin(a);
-		const up = (level - ground.heightM) / gradient;
-		const at = (s: number): PlanPoint => [
-			up * Math.sin(a) + (along + s) * Math.cos(a),
-			up * Math.cos(a) - (along + s) * Math.sin(a)
-		];
-		pen.line('ground', map.toPaper(at(-reachM)), map.toPaper(at(reachM)), mapStrokes.contour);
-		const end = lastInside(map, at, reachM);
-		if (end) {
-			pen.text('ground', end, formatNumber(level, intervalM < 1 ? 2 : 0), {
-				colour: c.faint,
-				anchor: 'middle'
-			});
-		}
-	}
-}
-
-/** A spot on a contour a little inside the window's edge, on the paper. */
-function lastInside(map: MapFrame, at: (s: number) => PlanPoint, reachM: number): PaperPoint | null {
-	const { xMm, yMm, widthMm, heightMm } = map.window;
-	for (let k = 200; k >= -200; k -= 1) {
-		const [x, y] = map.toPaper(at((reachM * k) / 200));
-		if (x > xMm + 16 && x < xMm + widthMm - 7 && y > yMm + 7 && y < yMm + heightMm - 9) return [x, y - 0.5];
-	}
-	return null;
-}
-
-/** A round interval that puts contours at least 14 mm apart on the paper. */
-export function contourIntervalM(risePercent: number, mmPerM: number): number {
-	const least = (14 / mmPerM) * (risePercent / 100);
-	const power = 10 ** Math.floor(Math.log10(least));
-	return [1, 2, 5, 10].map((k) => k * power).find((step) => step >= least) ?? 10 * power;
-}
 
 /** Crosses of the local grid with its metres written at the window's edge. */
 export function drawGrid(pen: Pen, map: MapFrame): void {
@@ -116,27 +65,53 @@ export function drawGrid(pen: Pen, map: MapFrame): void {
 }
 
 export function drawPlot(pen: Pen, plot: Plot, map: MapFrame): void {
-	const parts = plot.boundary.map((part) => ({
-		outer: simplifyRing(part.outer, DRAWN_MM / map.mmPerM),
-		holes: part.holes.map((hole) => simplifyRing(hole, DRAWN_MM / map.mmPerM))
-	}));
-	for (const part of parts) {
+	for (const part of drawnParts(plot, map)) {
 		for (const ring of [part.outer, ...part.holes]) {
 			const points = ring.map((p) => map.toPaper(p));
 			pen.polygon('boundary', [points], { stroke: mapStrokes.boundary });
 			drawCornerMarks(pen, points);
 		}
 	}
-	if (plot.setBackM > 0 && parts.length > 0) {
-		const chains = joinPieces(insetLines(parts, plot.setBackM));
-		for (const chain of chains) {
-			pen.path(
-				'set-back',
-				chain.map((p) => map.toPaper(p)),
-				mapStrokes.setBack
-			);
-		}
-	}
+	for (const chain of setBackChains(plot, map)) pen.path('set-back', chain, mapStrokes.setBack);
+}
+
+/** The set-back as lines on the paper. */
+function setBackChains(plot: Plot, map: MapFrame): PaperPoint[][] {
+	if (plot.setBackM <= 0 || plot.boundary.length === 0) return [];
+	const chains = joinPieces(insetLines(drawnParts(plot, map), plot.setBackM));
+	return chains.map((chain) => chain.map((p) => map.toPaper(p)));
+}
+
+/** The boundary without the corners that the paper cannot show. */
+function drawnParts(plot: Plot, map: MapFrame): Plot['boundary'] {
+	return plot.boundary.map((part) => ({
+		outer: simplifyRing(part.outer, DRAWN_MM / map.mmPerM),
+		holes: part.holes.map((hole) => simplifyRing(hole, DRAWN_MM / map.mmPerM))
+	}));
+}
+
+/** What the map's tags keep off: boundary, set-back and crowns as lines, blocks as areas. */
+export function tagHindrances(plot: Plot, map: MapFrame): TagHindrances {
+	const rings = drawnParts(plot, map)
+		.flatMap((part) => [part.outer, ...part.holes])
+		.map((ring) => [...ring, ring[0]].map((p) => map.toPaper(p)));
+	const crowns = plot.obstacles.flatMap((each) => (each.kind === 'tree' ? [crownRing(each, map)] : []));
+	const lines = [...rings, ...setBackChains(plot, map), ...crowns].flatMap((chain) =>
+		chain.slice(1).map((to, i): Segment => [chain[i], to])
+	);
+	const blocks = plot.obstacles.flatMap((each) =>
+		each.kind === 'box' ? [boxCorners(each).map((p) => map.toPaper(p))] : []
+	);
+	return { lines, blocks };
+}
+
+function crownRing(tree: Extract<Obstacle, { kind: 'tree' }>, map: MapFrame): PaperPoint[] {
+	const [x, y] = map.toPaper([tree.eastM, tree.northM]);
+	const r = tree.crownRadiusM * map.mmPerM;
+	return Array.from({ length: 17 }, (_, k): PaperPoint => {
+		const a = (k * Math.PI) / 8;
+		return [x + r * Math.sin(a), y - r * Math.cos(a)];
+	});
 }
 
 /** A small square at each corner, left out where the last one stands nearer than 1.6 mm. */
@@ -202,7 +177,8 @@ export function drawObstacles(pen: Pen, obstacles: Obstacle[], map: MapFrame): v
 	}
 }
 
-function boxCorners(box: Extract<Obstacle, { kind: 'box' }>): PlanPoint[] {
+/** Corners of a block on the ground, metres. */
+export function boxCorners(box: Extract<Obstacle, { kind: 'box' }>): PlanPoint[] {
 	const a = (box.turnDeg * Math.PI) / 180;
 	return (
 		[
@@ -233,13 +209,10 @@ export function drawTrackers(pen: Pen, rows: PegRow[], own: Set<string>, map: Ma
 }
 
 export function drawTags(pen: Pen, tags: PlacedTag[]): void {
+	for (const { leader } of tags) {
+		if (leader) pen.line('tags', leader[0], leader[1], { colour: c.ink, widthMm: 0.2 });
+	}
 	for (const tag of tags) {
-		if (tag.leaderTo) {
-			pen.line('tags', [tag.at[0], tag.at[1] - tag.capMm / 2], tag.leaderTo, {
-				colour: c.inkSoft,
-				widthMm: 0.15
-			});
-		}
 		pen.text('tags', tag.at, tag.text, {
 			capMm: tag.capMm,
 			weight: tag.optional ? 600 : 800,

@@ -80,7 +80,7 @@ export class Pen {
 		this.rect(
 			layer,
 			{ xMm: left - 0.3, yMm: y - capMm - 0.3, widthMm: width + 0.6, heightMm: capMm + 0.6 },
-			{ fill: { colour, opacity: 0.8 } }
+			{ fill: { colour } }
 		);
 	}
 

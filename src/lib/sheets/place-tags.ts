@@ -1,5 +1,6 @@
 import type { PaperPoint, PaperRect } from './drawing';
 import { lineWidthMm } from './font-book';
+import { BoxGrid, cutsCircle, cutsRing, cutsSegment, type Box, type Segment } from './paper-boxes';
 import { MIN_CAP_MM } from './text-fit';
 
 export interface TagWish {
@@ -17,94 +18,172 @@ export interface PlacedTag {
 	/** Middle of the baseline. */
 	at: PaperPoint;
 	optional: boolean;
-	/** End of a leader line at the cross, when the tag stands away from it. */
-	leaderTo: PaperPoint | null;
+	/** Line from the tag to its cross, when the tag is not where tags are looked for: over or in its own circle. */
+	leader: [from: PaperPoint, to: PaperPoint] | null;
 }
 
-type Box = [minX: number, minY: number, maxX: number, maxY: number];
+/** What else lies on the map: lines that tags rather keep off, and blocks that they keep off while they can. */
+export interface TagHindrances {
+	lines: Segment[];
+	/** Closed rings. */
+	blocks: PaperPoint[][];
+}
+
+interface Place {
+	box: Box;
+	leader: PlacedTag['leader'];
+}
 
 /** Half the size of a centre cross with its clear space. */
 const CROSS_MM = 1.5;
 const CAPS_MM = [2.8, 2.5, 2.2, 2, MIN_CAP_MM];
+/** Share of the tags that must find room over or in their own circle for a size to be the sheet's size. */
+const AT_HOME = 0.85;
 
 /**
- * Places every tag by its cross so that no two tags touch, none covers a cross and none leaves the window; tags that
- * lie on the fewest circle lines are preferred.
- * @returns the tags, all of one size, or null when some tag finds no place even at the smallest size
+ * Places every tag so that no two touch, none covers a cross and none leaves the window. A tag stands over its own
+ * circle or inside it; where a neighbour is in the way it gets smaller, and only then stands elsewhere, tied to its
+ * cross by a leader line.
+ * @param far lets leaders reach further than the next free spot about the circle
+ * @returns the tags, or null when some tag finds no place
  */
-export function placeTags(wishes: TagWish[], window: PaperRect, useLeaders: boolean): PlacedTag[] | null {
+export function placeTags(
+	wishes: TagWish[],
+	window: PaperRect,
+	far: boolean,
+	hindrances: TagHindrances = { lines: [], blocks: [] }
+): PlacedTag[] | null {
 	for (const capMm of CAPS_MM) {
-		const placed = placeAt(wishes, window, capMm, useLeaders && capMm === MIN_CAP_MM);
-		if (placed) return placed;
+		const smallest = capMm === MIN_CAP_MM;
+		const placer = new Placer(wishes, window, hindrances);
+		const wanted = wishes.filter((wish) => !wish.optional);
+		const left = wanted.filter((wish) => !placer.put(wish, capMm, 'home'));
+		if (!smallest && left.length > wanted.length * (1 - AT_HOME)) continue;
+		const smaller = CAPS_MM.filter((each) => each <= capMm);
+		const homeless = left.filter((wish) => !smaller.some((size) => placer.put(wish, size, 'home')));
+		const lost = homeless.filter(
+			(wish) =>
+				!smaller.some((size) => placer.put(wish, size, 'beside')) &&
+				!(smallest && far && placer.put(wish, capMm, 'far'))
+		);
+		if (lost.length > 0) continue;
+		for (const wish of wishes) if (wish.optional) placer.put(wish, Math.min(capMm, 2.2), 'code');
+		return placer.placed;
 	}
 	return null;
 }
 
-function placeAt(wishes: TagWish[], window: PaperRect, capMm: number, leaders: boolean): PlacedTag[] | null {
-	const taken = new BoxGrid();
-	const circles = new BoxGrid();
-	wishes.forEach((wish, i) => {
-		const [x, y] = wish.at;
-		taken.add([x - CROSS_MM, y - CROSS_MM, x + CROSS_MM, y + CROSS_MM]);
-		const r = wish.radiusMm;
-		circles.add([x - r, y - r, x + r, y + r], i);
-	});
-	const edge: Box = [window.xMm, window.yMm, window.xMm + window.widthMm, window.yMm + window.heightMm];
-	const placed: PlacedTag[] = [];
-	for (const wish of [...wishes].sort((a, b) => Number(a.optional ?? false) - Number(b.optional ?? false))) {
+class Placer {
+	readonly placed: PlacedTag[] = [];
+	private readonly taken = new BoxGrid();
+	private readonly circles = new BoxGrid();
+	private readonly lines = new BoxGrid();
+	private readonly edge: Box;
+
+	constructor(
+		private readonly wishes: TagWish[],
+		window: PaperRect,
+		private readonly hindrances: TagHindrances
+	) {
+		wishes.forEach(({ at: [x, y], radiusMm: r, optional }, i) => {
+			if (!optional) this.taken.add([x - CROSS_MM, y - CROSS_MM, x + CROSS_MM, y + CROSS_MM], i);
+			this.circles.add([x - r, y - r, x + r, y + r], i);
+		});
+		hindrances.lines.forEach(([[x0, y0], [x1, y1]], i) =>
+			this.lines.add([Math.min(x0, x1), Math.min(y0, y1), Math.max(x0, x1), Math.max(y0, y1)], i)
+		);
+		this.edge = [window.xMm, window.yMm, window.xMm + window.widthMm, window.yMm + window.heightMm];
+	}
+
+	/** Places a tag in the best free spot of a kind; false when there is none. */
+	put(wish: TagWish, capMm: number, kind: 'home' | 'beside' | 'far' | 'code'): boolean {
 		const w = lineWidthMm(wish.text, capMm, 800) + 0.6;
 		const h = capMm + 0.8;
-		let best: { box: Box; cost: number; leader: boolean } | null = null;
-		const tryAll = (offsets: PaperPoint[], leader: boolean) => {
-			offsets.forEach(([dx, dy], rank) => {
-				const [cx, cy] = [wish.at[0] + dx, wish.at[1] + dy];
-				const box: Box = [cx - w / 2, cy - h / 2, cx + w / 2, cy + h / 2];
-				const inside = box[0] > edge[0] && box[1] > edge[1] && box[2] < edge[2] && box[3] < edge[3];
-				if (!inside || taken.hits(box)) return;
-				const cost = circles.near(box).filter((i) => circleCuts(wishes[i], box)).length * 12 + rank * 0.5;
-				if (!best || cost < best.cost) best = { box, cost, leader };
-			});
-		};
-		tryAll(besideOffsets(w, h, wish.radiusMm), false);
-		if (!best && leaders) tryAll(leaderOffsets(w, h), true);
-		const found = best as { box: Box; leader: boolean } | null;
-		if (!found && wish.optional) continue;
-		if (!found) return null;
-		taken.add(found.box);
-		placed.push({
+		const offsets = { home: homeOffsets, beside: besideOffsets, far: farOffsets, code: codeOffsets }[kind];
+		let best: (Place & { cost: number }) | null = null;
+		for (const [rank, [dx, dy]] of offsets(w, h, wish.radiusMm).entries()) {
+			const [cx, cy] = [wish.at[0] + dx, wish.at[1] + dy];
+			const box: Box = [cx - w / 2, cy - h / 2, cx + w / 2, cy + h / 2];
+			const place = this.judge(wish, box, kind);
+			if (place && (!best || place.cost + rank * 0.5 < best.cost))
+				best = { ...place, cost: place.cost + rank * 0.5 };
+		}
+		if (!best) return false;
+		const { box, leader } = best;
+		this.taken.add(box);
+		this.placed.push({
 			text: wish.text,
 			capMm,
 			optional: wish.optional === true,
-			at: [(found.box[0] + found.box[2]) / 2, (found.box[1] + found.box[3] + capMm) / 2],
-			leaderTo: found.leader ? wish.at : null
+			at: [(box[0] + box[2]) / 2, (box[1] + box[3] + capMm) / 2],
+			leader
 		});
+		return true;
 	}
-	return placed;
+
+	/** What a spot costs; null where a tag cannot stand. */
+	private judge(wish: TagWish, box: Box, kind: string): (Place & { cost: number }) | null {
+		const { edge } = this;
+		const inside = box[0] > edge[0] && box[1] > edge[1] && box[2] < edge[2] && box[3] < edge[3];
+		if (!inside || this.taken.hits(box)) return null;
+		if (this.placed.some(({ leader }) => leader && cutsSegment(leader, box))) return null;
+		const cut = this.circles.near(box).filter((i) => cutsCircle(this.wishes[i], box)).length;
+		const blocked = this.hindrances.blocks.filter((block) => cutsRing(block, box)).length;
+		const struck = this.lines.near(box).filter((i) => cutsSegment(this.hindrances.lines[i], box)).length;
+		if (kind === 'home' && (cut > 0 || blocked > 0)) return null;
+		const cost = cut * 12 + blocked * (kind === 'code' ? 0 : 16) + Math.min(struck, 2) * 3;
+		if (kind === 'home' || kind === 'code') return { box, leader: null, cost };
+		const leader = this.leaderFrom(wish, box);
+		return leader ? { box, leader, cost } : null;
+	}
+
+	/** The straight line from a tag's edge to the arm of its cross; null when it would run through another tag or cross. */
+	private leaderFrom(wish: TagWish, box: Box): PlacedTag['leader'] {
+		const [x, y] = wish.at;
+		const from: PaperPoint = [Math.min(Math.max(x, box[0]), box[2]), Math.min(Math.max(y, box[1]), box[3])];
+		const length = Math.hypot(from[0] - x, from[1] - y);
+		const short = Math.min(0.4, length / 2) / length;
+		const to: PaperPoint = [x + (from[0] - x) * short, y + (from[1] - y) * short];
+		const own = this.wishes.indexOf(wish);
+		const line: Segment = [from, to];
+		const round: Box = [
+			Math.min(from[0], to[0]),
+			Math.min(from[1], to[1]),
+			Math.max(from[0], to[0]),
+			Math.max(from[1], to[1])
+		];
+		const struck = this.taken.around(round).some((other) => other.id !== own && cutsSegment(line, other.box));
+		return struck ? null : line;
+	}
 }
 
-/** Middles of the label box about the cross: above, below, beside, then beyond the circle. */
-function besideOffsets(w: number, h: number, radiusMm: number): PaperPoint[] {
-	const dx = CROSS_MM + w / 2 + 0.1;
+/** Middles of the label box over the circle, then inside it over and under the cross where it fits. */
+function homeOffsets(w: number, h: number, radiusMm: number): PaperPoint[] {
+	const over: PaperPoint = [0, -(radiusMm + h / 2 + 0.2)];
 	const dy = CROSS_MM + h / 2 + 0.1;
-	const out = radiusMm + h / 2 + 0.2;
-	const outX = radiusMm + w / 2 + 0.2;
+	const fits = Math.hypot(w / 2, dy + h / 2) < radiusMm;
+	return fits ? [[0, -dy], [0, dy], over] : [over];
+}
+
+/** About the circle, touching it: under, at the sides, at the corners. */
+function besideOffsets(w: number, h: number, radiusMm: number): PaperPoint[] {
+	const out = Math.max(radiusMm, CROSS_MM) + 0.2;
+	const slant = out * Math.SQRT1_2;
 	return [
-		[0, -dy],
-		[0, dy],
-		[dx, -dy],
-		[-dx, -dy],
-		[dx, dy],
-		[-dx, dy],
-		[dx, 0],
-		[-dx, 0],
-		[0, -out],
-		[0, out],
-		[outX, 0],
-		[-outX, 0]
+		[0, out + h / 2],
+		[out + w / 2, 0],
+		[-out - w / 2, 0],
+		[slant + w / 2, -slant - h / 2],
+		[-slant - w / 2, -slant - h / 2],
+		[slant + w / 2, slant + h / 2],
+		[-slant - w / 2, slant + h / 2],
+		[0, -out - h * 1.6],
+		[out + w / 2, -out - h],
+		[-out - w / 2, -out - h]
 	];
 }
 
-function leaderOffsets(w: number, h: number): PaperPoint[] {
+function farOffsets(w: number, h: number): PaperPoint[] {
 	const offsets: PaperPoint[] = [];
 	for (let ring = 1; ring <= 40; ring += 1) {
 		const reach = CROSS_MM + ring * h;
@@ -116,49 +195,12 @@ function leaderOffsets(w: number, h: number): PaperPoint[] {
 	return offsets;
 }
 
-/** Whether a circle's line runs through a box. */
-function circleCuts(wish: TagWish, box: Box): boolean {
-	const [x, y] = wish.at;
-	const nearX = Math.max(box[0] - x, 0, x - box[2]);
-	const nearY = Math.max(box[1] - y, 0, y - box[3]);
-	const farX = Math.max(Math.abs(box[0] - x), Math.abs(box[2] - x));
-	const farY = Math.max(Math.abs(box[1] - y), Math.abs(box[3] - y));
-	return Math.hypot(nearX, nearY) < wish.radiusMm && Math.hypot(farX, farY) > wish.radiusMm;
-}
-
-/** Boxes in a grid of 10 mm cells, so that a thousand tags do not compare with each other. */
-class BoxGrid {
-	private readonly cells = new Map<string, { box: Box; id: number }[]>();
-
-	add(box: Box, id = -1): void {
-		for (const key of this.keys(box)) {
-			const cell = this.cells.get(key);
-			if (cell) cell.push({ box, id });
-			else this.cells.set(key, [{ box, id }]);
-		}
-	}
-
-	hits(box: Box): boolean {
-		return this.keys(box).some((key) => this.cells.get(key)?.some((other) => overlap(box, other.box)));
-	}
-
-	near(box: Box): number[] {
-		const ids = new Set<number>();
-		for (const key of this.keys(box)) {
-			for (const other of this.cells.get(key) ?? []) if (overlap(box, other.box)) ids.add(other.id);
-		}
-		return [...ids];
-	}
-
-	private keys(box: Box): string[] {
-		const keys: string[] = [];
-		for (let i = Math.floor(box[0] / 10); i <= Math.floor(box[2] / 10); i += 1) {
-			for (let j = Math.floor(box[1] / 10); j <= Math.floor(box[3] / 10); j += 1) keys.push(`${i},${j}`);
-		}
-		return keys;
-	}
-}
-
-function overlap(a: Box, b: Box): boolean {
-	return a[0] < b[2] && b[0] < a[2] && a[1] < b[3] && b[1] < a[3];
+/** The code of an obstacle: on it, clear of the trunk's dot, or next to it. */
+function codeOffsets(w: number, h: number): PaperPoint[] {
+	return [
+		[0, -(h / 2 + 0.6)],
+		[0, h / 2 + 0.6],
+		[w / 2 + 1, 0],
+		[-w / 2 - 1, 0]
+	];
 }

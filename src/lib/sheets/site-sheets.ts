@@ -3,14 +3,15 @@ import { formatNumber } from '../i18n';
 import type { PegRow } from '../schema/peg-row';
 import {
 	drawGrid,
-	drawGround,
 	drawObstacles,
 	drawOrigin,
 	drawPlot,
 	drawTags,
 	drawTrackers,
-	obstacleShows
+	obstacleShows,
+	tagHindrances
 } from './draw-map';
+import { drawGround } from './draw-ground';
 import type { PaperRect, Sheet } from './drawing';
 import { obstacleCodes } from './obstacle-codes';
 import { chooseReduction, extentOf, MapFrame, type Extent } from './map-scale';
@@ -110,7 +111,7 @@ function frameFor(extent: Extent): MapFrame {
 	return new MapFrame(mapWindow, extent, chooseReduction(size, room, LARGEST_REDUCTION));
 }
 
-function mapTags(content: PlanContent, rows: PegRow[], map: MapFrame, leaders: boolean): PlacedTag[] | null {
+function mapTags(content: PlanContent, rows: PegRow[], map: MapFrame, far: boolean): PlacedTag[] | null {
 	const wishes: TagWish[] = rows.map((row) => ({
 		text: row.tag,
 		at: map.toPaper([row.eastM, row.northM]),
@@ -126,7 +127,7 @@ function mapTags(content: PlanContent, rows: PegRow[], map: MapFrame, leaders: b
 			optional: true
 		});
 	});
-	return placeTags(wishes, inner(mapWindow, 1), leaders);
+	return placeTags(wishes, inner(mapWindow, 1), far, tagHindrances(content.plot, map));
 }
 
 function inner(rect: PaperRect, byMm: number): PaperRect {
@@ -150,7 +151,7 @@ function siteSheet(
 	return (place) =>
 		framedSheet(content, place, { name, documentType: 'Setting-out plan', scale }, (pen) => {
 			pen.clipped('ground', map.window, (inside) => {
-				drawGround(inside, content.plot.ground, map);
+				drawGround(inside, content.plot, map);
 				drawGrid(inside, map);
 				drawObstacles(inside, content.plot.obstacles, map);
 				drawPlot(inside, content.plot, map);
