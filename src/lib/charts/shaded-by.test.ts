@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { fieldShade, prepareField, type Layout } from '$lib/core';
+import { fieldShade, prepareField, type Layout, type Plot } from '$lib/core';
 import { emptyPlot, modelLibrary } from '$lib/schema';
-import { castersOf, noSunWords } from './shaded-by';
+import { castersOf, dayCauses, noSunWords, obstacleCastersOf } from './shaded-by';
 
 const place = {
 	latitudeDeg: 41.2,
@@ -52,6 +52,37 @@ describe('who shades a tracker', () => {
 				expect(castersOf(field, index, sun).length > 0).toBe(shares[index] > 1e-9);
 			});
 		}
+	});
+
+	it('names obstacles too, and sums over the moments of a day', () => {
+		const low = { azimuthDeg: 90, elevationDeg: 5 };
+		const plot: Plot = {
+			...emptyPlot(),
+			obstacles: [
+				{
+					id: 'o1',
+					kind: 'box',
+					name: 'Barn',
+					eastM: 45,
+					northM: 0,
+					sizeXM: 4,
+					sizeYM: 30,
+					heightM: 12,
+					turnDeg: 0
+				}
+			]
+		};
+		const beside = prepareField({ place, plot, layout });
+		expect(obstacleCastersOf(beside, 2, low)).toEqual(['Barn']);
+		expect(castersOf(beside, 2, low)).toEqual([]);
+		expect(obstacleCastersOf(field, 2, low)).toEqual([]);
+		// From the east the barn shades the eastern one alone, from the west the middle one does.
+		expect(dayCauses(beside, 2, [low])).toEqual(['Barn']);
+		expect(dayCauses(beside, 2, [{ azimuthDeg: 270, elevationDeg: 5 }])[0]).toBe('middle');
+		expect(new Set(dayCauses(beside, 2, [low, { azimuthDeg: 270, elevationDeg: 5 }]))).toEqual(
+			new Set(['Barn', 'middle', 'west'])
+		);
+		expect(dayCauses(beside, 2, [{ azimuthDeg: 90, elevationDeg: -5 }])).toEqual([]);
 	});
 
 	it('blames nobody at night, behind the skyline or for a table with its back to the sun', () => {

@@ -1,10 +1,19 @@
-import { fieldSunHidden, shadeScene, sunVector, tableAxes, trackerPoses, type Field } from '$lib/core';
+import {
+	fieldShade,
+	fieldSunHidden,
+	prepareField,
+	shadeScene,
+	sunVector,
+	tableAxes,
+	trackerPoses,
+	type Field
+} from '$lib/core';
 
 type Sun = { azimuthDeg: number; elevationDeg: number };
 
 interface Caster {
 	index: number;
-	/** Part of the table that this neighbour alone would shade, 0..1. */
+	/** Part of the table that this one alone would shade, 0..1. */
 	share: number;
 }
 
@@ -13,6 +22,52 @@ interface Caster {
  * target with the core's exact areas; obstacles and skyline are left out.
  */
 export function castersOf(field: Field, target: number, sun: Sun): number[] {
+	return casters(field, target, sun).map((caster) => caster.index);
+}
+
+/** Names of the obstacles that shade one tracker's table at a moment, most first, each tried alone. */
+export function obstacleCastersOf(field: Field, target: number, sun: Sun): string[] {
+	return obstacleCasters(field, target, sun).map((caster) => field.plot.obstacles[caster.index].name);
+}
+
+/** Fields above this many trackers are asked at one moment only, to keep the page quick. */
+const sampledFieldsTo = 600;
+const samples = 12;
+
+/**
+ * Who shades one tracker over some moments of a day, as tags and obstacle names: by the shade that each throws alone,
+ * most first. `moments` are suns, the worst first.
+ */
+export function dayCauses(field: Field, target: number, moments: readonly Sun[]): string[] {
+	const taken = moments.slice(0, field.layout.trackers.length > sampledFieldsTo ? 1 : samples);
+	const sums = new Map<string, number>();
+	const add = (name: string, share: number) => sums.set(name, (sums.get(name) ?? 0) + share);
+	for (const sun of taken) {
+		for (const { index, share } of casters(field, target, sun)) add(field.layout.trackers[index].tag, share);
+		for (const { index, share } of obstacleCasters(field, target, sun)) {
+			add(field.plot.obstacles[index].name, share);
+		}
+	}
+	return [...sums].sort((a, b) => b[1] - a[1]).map(([name]) => name);
+}
+
+function obstacleCasters(field: Field, target: number, sun: Sun): Caster[] {
+	const tracker = field.layout.trackers[target];
+	if (!tracker || fieldSunHidden(field, sun) || noSunWords(field, target, sun) !== null) return [];
+	const { place, plot, treeYears } = field;
+	const found = plot.obstacles.map((obstacle, index): Caster => {
+		const alone = prepareField({
+			place,
+			plot: { ...plot, obstacles: [obstacle], skyline: [] },
+			layout: { ...field.layout, trackers: [tracker] },
+			treeYears
+		});
+		return { index, share: fieldShade(alone, sun)[0] };
+	});
+	return found.filter((caster) => caster.share > 1e-9).sort((a, b) => b.share - a.share);
+}
+
+function casters(field: Field, target: number, sun: Sun): Caster[] {
 	if (fieldSunHidden(field, sun)) return [];
 	const poses = trackerPoses(field, sun);
 	const tables = poses.map((pose, index) => ({
@@ -36,7 +91,7 @@ export function castersOf(field: Field, target: number, sun: Sun): number[] {
 		const [shaded] = shadeScene({ sun, tables: [goal, steel], obstacles: [], skyline: [] });
 		if (shaded.frontLit && shaded.shadedShare > 1e-9) found.push({ index, share: shaded.shadedShare });
 	});
-	return found.sort((a, b) => b.share - a.share).map((caster) => caster.index);
+	return found.sort((a, b) => b.share - a.share);
 }
 
 /** Why no sun can reach a table whatever stands around it, as the end of a sentence; null when it could. */
