@@ -1,6 +1,7 @@
 import type { Mount } from '$lib/core/document';
 import type { MountClass, MountPlaceResult, MountResult, TrackerMounts } from '$lib/core/results';
 import { nearestPlace } from './edge-cells';
+import { worthOwnPlace } from './own-place';
 
 /** What one place would mean for the whole field. */
 export interface FieldChoice {
@@ -8,7 +9,7 @@ export interface FieldChoice {
 	counts: Record<MountClass, number>;
 	/** Trackers for which it is Clear or Sound. */
 	serves: number;
-	/** Trackers for which it is worse, each with its own best place. */
+	/** Trackers for which it is worse and their own best place is worth having, with that place. */
 	exceptions: { trackerId: string; tag: string; place: MountPlaceResult; commonClass: MountClass }[];
 }
 
@@ -19,16 +20,15 @@ export function placeAt(tracker: TrackerMounts, mount: Mount): MountPlaceResult 
 	return nearestPlace(tracker.edges, mount) ?? tracker.best;
 }
 
-/** Puts one mount on every tracker; where it is worse than Sound, the tracker's own best place stands in if that is better. */
+/** Puts one mount on every tracker; where it is worse than Sound, the tracker's own best place stands in if that is worth it. */
 export function fieldChoice(result: MountResult, mount: Mount, classOf: ClassOf): FieldChoice {
 	const counts: Record<MountClass, number> = { clear: 0, sound: 0, watch: 0, unfit: 0 };
 	const exceptions: FieldChoice['exceptions'] = [];
-	const order: MountClass[] = ['clear', 'sound', 'watch', 'unfit'];
 	for (const tracker of result.trackers) {
-		const kind = classOf(placeAt(tracker, mount));
+		const there = placeAt(tracker, mount);
+		const kind = classOf(there);
 		counts[kind] += 1;
-		const better = order.indexOf(classOf(tracker.best)) < order.indexOf(kind);
-		if ((kind === 'watch' || kind === 'unfit') && better) {
+		if ((kind === 'watch' || kind === 'unfit') && worthOwnPlace(there, tracker.best)) {
 			exceptions.push({
 				trackerId: tracker.trackerId,
 				tag: tracker.tag,

@@ -6,6 +6,8 @@ import { formatDay, formatMinutes, formatNumber } from '$lib/i18n';
 export interface MeasureRow {
 	key: string;
 	label: string;
+	/** What a word of the trade in the label means, empty where it speaks for itself. */
+	meaning: string;
 	value: string;
 	/** Its own class, null for what is told but does not decide. */
 	class: MountClass | null;
@@ -36,6 +38,11 @@ function classOfMeasure(place: MountPlaceResult, key: (typeof MOUNT_MEASURES)[nu
 	return MOUNT_CLASSES[rankMount(alone).rank];
 }
 
+const meanings: Record<string, string> = {
+	blindHours: 'blind: the head, the eye of the sensor, is shaded while its own table has sun',
+	runUpWorstMinutes: 'run-up: from the first sun on the table until the head has it'
+};
+
 /** The measures of a place in the order they are read. */
 export function measuresOf(place: MountPlaceResult): MeasureRow[] {
 	const deciding = MOUNT_MEASURES.map((measure): MeasureRow => {
@@ -48,6 +55,7 @@ export function measuresOf(place: MountPlaceResult): MeasureRow[] {
 		return {
 			key: measure.key,
 			label: measure.key === 'blindHours' ? 'blind while its table is lit' : measure.label,
+			meaning: meanings[measure.key] ?? '',
 			value: isTime ? formatMinutes(value) + date : `${hoursWords(value)} a year`,
 			class: classOfMeasure(place, measure.key),
 			clear: `up to ${measure.clear} ${measure.unit}`,
@@ -57,6 +65,7 @@ export function measuresOf(place: MountPlaceResult): MeasureRow[] {
 	const told = (key: string, label: string, value: string): MeasureRow => ({
 		key,
 		label,
+		meaning: '',
 		value,
 		class: null,
 		clear: '',

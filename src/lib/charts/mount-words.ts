@@ -21,6 +21,14 @@ export const classWords: Record<MountClass, string> = {
 	unfit: 'Unfit'
 };
 
+/** What each class means for the work. */
+export const classMeanings: Record<MountClass, string> = {
+	clear: 'hardly ever shaded',
+	sound: 'shaded now and then, without harm',
+	watch: 'shaded often enough to look after',
+	unfit: 'shaded too much: not here'
+};
+
 /** Sound lies between clear and watch and has no token of its own: 3:1 at least against the sheet in both themes. */
 export const classColours: Record<MountClass, string> = {
 	clear: 'var(--color-clear)',
