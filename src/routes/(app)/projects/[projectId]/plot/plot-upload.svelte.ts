@@ -1,6 +1,7 @@
 import type { BoundaryPart, Place } from '$lib/core';
 import {
 	readBoundary,
+	readKind,
 	readSkyline,
 	refuseLargeFile,
 	summariseBoundary,
@@ -60,13 +61,13 @@ export class PlotUpload {
 		this.#place = store.project.place;
 	}
 
-	/** Reads a chosen or dropped file. A CSV is a skyline unless a boundary was asked for. */
+	/** Reads a chosen or dropped file; what it is, is told by what stands in it. */
 	async take(file: File, wanted: FileKind | null): Promise<void> {
-		const kind = wanted ?? (/\.(csv|txt|tsv)$/i.test(file.name) ? 'skyline' : 'boundary');
+		const asked = wanted ?? 'boundary';
 		this.#place = this.#store.project.place;
 		const large = refuseLargeFile(file.size);
 		if (large) {
-			this.#refuse(kind, file.name, large, false);
+			this.#refuse(asked, file.name, large, false);
 			return;
 		}
 		this.busy = true;
@@ -74,12 +75,14 @@ export class PlotUpload {
 			this.#bytes = new Uint8Array(await file.arrayBuffer());
 		} catch (error) {
 			this.#bytes = null;
-			this.#refuse(kind, file.name, unreadable(error), false);
+			this.#refuse(asked, file.name, unreadable(error), false);
 			return;
 		} finally {
 			this.busy = false;
 		}
-		this.#read(kind, file.name, false);
+		const found = readKind(this.#bytes, file.name, wanted);
+		if (found.ok) this.#read(found.kind, file.name, false);
+		else this.#refuse(asked, file.name, found, false);
 	}
 
 	async takeSample(kind: FileKind): Promise<void> {
