@@ -39,7 +39,11 @@ describe('coordinates as people write them', () => {
 		'45.07 / 7.69',
 		'45.07\t7.69',
 		'geo:45.07,7.69',
-		'geo:45.07,7.69;crs=wgs84;u=20'
+		'geo:45.07,7.69;crs=wgs84;u=20',
+		'https://maps.example/place/A+farm/@45.07,7.69,15z/data=!3m1',
+		'https://maps.example/?q=45.07,7.69&z=12',
+		'https://maps.example/map?z=12&ll=45.07%2C7.69',
+		'https://maps.example/@45.07,7.69,15z?q=45.07,7.69'
 	])('reads %j', (text) => {
 		const [latitudeDeg, longitudeDeg] = read(text);
 		expect(latitudeDeg).toBeCloseTo(here[0], 9);
@@ -86,11 +90,19 @@ describe('coordinates as people write them', () => {
 		['45.5°30′ N 7°41′ E', 'only the last part'],
 		['-45 N, 7 E', 'minus sign and a letter'],
 		['geo:45.07,7.69;crs=nad27', 'WGS 84'],
+		['https://maps.example/@45.07,7.69,15z?q=46.1,8.2', '2 different places'],
+		['https://maps.example/@107.69,45.07,15z', 'Latitude comes first'],
+		['https://maps.example/?q=a+farm', 'Two numbers are needed'],
 		['x'.repeat(201), 'too long']
 	])('refuses %j with a remedy', (text, words) => {
 		const parsed = parseCoordinates(text);
 		expect(parsed.ok).toBe(false);
 		if (!parsed.ok) expect(parsed.message).toContain(words);
+	});
+
+	it('takes a link that is longer than anything typed', () => {
+		expect(read(`https://maps.example/@45.07,7.69,15z/${'a'.repeat(600)}`)).toEqual(here);
+		expect(parseCoordinates(`https://maps.example/@45.07,7.69/${'a'.repeat(2000)}`).ok).toBe(false);
 	});
 
 	it('reads back any place that it would write itself', () => {

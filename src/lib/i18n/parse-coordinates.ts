@@ -111,15 +111,47 @@ function readGeoUri(text: string): ParsedCoordinates {
 	);
 }
 
+/** Longest text that is looked at, characters: links are long. */
+export const MAX_PLACE_TEXT = 2000;
+const MAX_TYPED = 200;
+
+/** A pair in decimal degrees after `@`, `q=` or `ll=`, as map links carry it; a comma may be written as %2C. */
+const linkPair =
+	/(?:@|(?:^|[?&#;\s])(?:q|ll)=)([+-]?\d{1,3}\.\d+)(?:,|%2C)(?:\s|\+|%20)*([+-]?\d{1,3}\.\d+)(?![\d.])/gi;
+
+/** The one place that a pasted link holds; null when the text is no such link. */
+function readLink(text: string): ParsedCoordinates | null {
+	const places = new Map<string, [number, number]>();
+	for (const [, latitude, longitude] of text.matchAll(linkPair)) {
+		const pair: [number, number] = [Number(latitude), Number(longitude)];
+		places.set(pair.join(), pair);
+	}
+	if (places.size > 1) {
+		return {
+			ok: false,
+			message: `The link holds ${places.size} different places: write latitude and longitude, ${EXAMPLE}.`
+		};
+	}
+	const [only] = places.values();
+	return only ? checked(...only) : null;
+}
+
 /**
  * Reads latitude and longitude (WGS 84, degrees) as people type or paste them: decimal degrees with point or comma, degrees
  * and minutes, degrees minutes seconds, letters or signs in front or behind, in either order when letters say which is
- * which, and `geo:` addresses.
+ * which, `geo:` addresses, and links in which one pair of decimal degrees stands after `@`, `q=` or `ll=`.
  */
 export function parseCoordinates(text: string): ParsedCoordinates {
 	if (!text.trim()) return { ok: false, message: `Write latitude and longitude, ${EXAMPLE}.` };
-	if (text.length > 200) return { ok: false, message: `That is too long for one place. Write ${EXAMPLE}.` };
+	const tooLong: ParsedCoordinates = {
+		ok: false,
+		message: `That is too long for one place. Write ${EXAMPLE}.`
+	};
+	if (text.length > MAX_PLACE_TEXT) return tooLong;
 	if (/^\s*geo:/i.test(text)) return readGeoUri(text);
+	const linked = readLink(text);
+	if (linked) return linked;
+	if (text.length > MAX_TYPED) return tooLong;
 	const clean = normalise(text);
 	const pair = halves(clean);
 	if (!pair) return { ok: false, message: `Two numbers are needed, latitude and longitude, ${EXAMPLE}.` };
