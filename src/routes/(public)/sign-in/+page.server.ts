@@ -2,7 +2,7 @@ import { redirect } from '@sveltejs/kit';
 import { signInSchema } from '$lib/schema/sign-forms';
 import { openSession } from '$lib/server/auth/session';
 import { signIn } from '$lib/server/auth/sign-in';
-import { seedsDemo } from '$lib/server/env';
+import { isLocal, seedsDemo } from '$lib/server/env';
 import { nextPath } from '$lib/server/http/next-path';
 import { answerForm } from '$lib/server/http/read-form';
 import type { Actions, PageServerLoad } from './$types';
@@ -13,7 +13,7 @@ export const load: PageServerLoad = ({ locals, url }) => {
 		query: url.search,
 		onTheWay: url.searchParams.has('next'),
 		passwordSet: url.searchParams.has('password-set'),
-		demo: seedsDemo()
+		demo: seedsDemo() && isLocal()
 	};
 };
 
