@@ -124,6 +124,11 @@ export function makeCommands(editor: Editor): Command[] {
 	const { store } = editor;
 	const editable = (): boolean => !store.readOnly;
 	const chosen = (): boolean => editor.selected.length > 0;
+	// What was said before no longer holds once history is walked.
+	const travel = (word: string, label: string | null, go: () => void): void => {
+		go();
+		editor.said = label === null ? '' : `${word}: ${label}.`;
+	};
 	return [
 		...toolCommands(editor),
 		...nudgeCommands(editor),
@@ -132,14 +137,14 @@ export function makeCommands(editor: Editor): Command[] {
 			label: 'Undo',
 			keys: ['mod+z'],
 			enabled: () => store.canUndo,
-			run: () => store.undo()
+			run: () => travel('Undone', store.undoLabel, () => store.undo())
 		},
 		{
 			id: 'redo',
 			label: 'Redo',
 			keys: ['mod+shift+z', 'mod+y'],
 			enabled: () => store.canRedo,
-			run: () => store.redo()
+			run: () => travel('Redone', store.redoLabel, () => store.redo())
 		},
 		{
 			id: 'select-all',

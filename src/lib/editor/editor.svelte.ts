@@ -1,7 +1,7 @@
 import { getContext, setContext } from 'svelte';
 import { nextTags, type PlanPoint, type Tracker, type TrackerModel } from '$lib/core';
 import type { AlignGuide } from './kernels/align';
-import { addTrackers, removeTrackers } from './kernels/layout-edit';
+import { addTrackers, changeTrackers, removeTrackers } from './kernels/layout-edit';
 import { tagForOne } from './kernels/single-tag';
 import type { PlanBox } from './kernels/pick';
 import type { ProjectStore } from './project-store.svelte';
@@ -34,6 +34,8 @@ export class Editor {
 	/** Trackers that a view should bring to its middle; the number makes each wish a new one. */
 	flight = $state.raw<{ ids: string[]; count: number }>({ ids: [], count: 0 });
 	#modelId = $state<string | null>(null);
+	/** Axis height chosen for new trackers of one model; gone when heights of standing trackers are changed. */
+	#axis = $state.raw<{ modelId: string; heightM: number } | null>(null);
 	/** Answers whether the tool in hand had anything to give up. */
 	#cancelTool: (() => boolean) | null = null;
 
@@ -55,6 +57,31 @@ export class Editor {
 
 	set model(model: TrackerModel | null) {
 		this.#modelId = model?.id ?? null;
+	}
+
+	/** Axis height that new trackers get, metres: the one chosen, else that of the last tracker of the model, else the model's. */
+	get axisHeightM(): number {
+		const { model } = this;
+		if (!model) return 0;
+		if (this.#axis?.modelId === model.id) return this.#axis.heightM;
+		const last = this.store.layout.trackers.findLast(({ modelId }) => modelId === model.id);
+		return last?.axisHeightM ?? model.axisHeightM;
+	}
+
+	set axisHeightM(heightM: number | null) {
+		const { model } = this;
+		this.#axis = model && heightM !== null ? { modelId: model.id, heightM } : null;
+	}
+
+	/** As trackers keep it: null is the model's own. */
+	get newAxisHeightM(): number | null {
+		return this.axisHeightM === this.model?.axisHeightM ? null : this.axisHeightM;
+	}
+
+	/** Changes the axis height of trackers in one undo step; new ones then follow the last that stands. */
+	changeAxis(label: string, ids: ReadonlySet<string>, axisHeightM: number | null): void {
+		this.#axis = null;
+		this.store.replaceLayout(label, changeTrackers(this.store.layout, ids, { axisHeightM }));
 	}
 
 	useTool(tool: ToolId): void {
@@ -106,7 +133,12 @@ export class Editor {
 						points,
 						{ turnDeg: options.turnDeg, rowToleranceM: options.rowToleranceM }
 					);
-		const added = points.map((point, index) => ({ id: newTrackerId(), tag: tags[index], point }));
+		const added = points.map((point, index) => ({
+			id: newTrackerId(),
+			tag: tags[index],
+			point,
+			axisHeightM: this.newAxisHeightM
+		}));
 		store.replaceLayout(label, addTrackers(base, model, added));
 		this.selected = added.map(({ id }) => id);
 		this.said = `${added.length === 1 ? `${added[0].tag} placed` : `${added.length} trackers placed`}.`;

@@ -7,7 +7,9 @@ import {
 	type PlanPoint,
 	type TrackerModel
 } from '$lib/core';
+import { formatNumber } from '$lib/i18n';
 import type { Editor } from './editor.svelte';
+import { leastAcrossM, leastAlongM } from './kernels/fill-pitch';
 import { addTrackers, removeTrackers } from './kernels/layout-edit';
 import { PreviewClient } from './preview-client';
 
@@ -36,6 +38,14 @@ export class FillPreview {
 	dayLoss = $state<number | null>(null);
 	clearAboveDeg = $state<number | null>(null);
 	failure = $state<string | null>(null);
+	/** Why what is typed in a field was refused, by field; while one is, nothing is foretold or placed. */
+	refusals = $state<Record<'along' | 'across' | 'stagger' | 'turn' | 'axis', string | null>>({
+		along: null,
+		across: null,
+		stagger: null,
+		turn: null,
+		axis: null
+	});
 
 	constructor(editor: Editor) {
 		this.editor = editor;
@@ -43,9 +53,31 @@ export class FillPreview {
 		this.replace = editor.store.layout.trackers.length === 0;
 	}
 
+	/** What two feet must keep between them for their circles not to overlap. */
+	readonly apartM = $derived.by(() => (this.editor.model ? 2 * reachRadiusM(this.editor.model) : 0));
+	readonly leastAlongM = $derived(leastAlongM(this.apartM));
+	readonly leastAcrossM = $derived(leastAcrossM(this.apartM, this.eastWestM, this.staggerPercent / 100));
+	/** Pitches that would let circles overlap, as sentences with the least that does not. */
+	readonly alongProblem = $derived(
+		this.eastWestM < this.leastAlongM
+			? `Reach circles would overlap: give ${formatNumber(this.leastAlongM, 2)} m or more.`
+			: null
+	);
+	readonly acrossProblem = $derived(
+		this.alongProblem === null && this.northSouthM < this.leastAcrossM
+			? `Reach circles would overlap: give ${formatNumber(this.leastAcrossM, 2)} m or more${this.staggerPercent > 0 ? ', or change the stagger' : ''}.`
+			: null
+	);
+	/** Whether every field holds something that can be filled by. */
+	readonly sound = $derived(
+		this.alongProblem === null &&
+			this.acrossProblem === null &&
+			Object.values(this.refusals).every((refusal) => refusal === null)
+	);
+
 	readonly points = $derived.by((): PlanPoint[] => {
 		const { store, model } = this.editor;
-		if (!model || store.plot.boundary.length === 0) return [];
+		if (!model || store.plot.boundary.length === 0 || !this.sound) return [];
 		const points = fillPlot({
 			plot: store.plot,
 			model,
@@ -63,12 +95,16 @@ export class FillPreview {
 		const base = this.replace
 			? removeTrackers(store.layout, new Set(store.layout.trackers.map(({ id }) => id)))
 			: store.layout;
-		const added = this.points.map((point, index) => ({ id: `fill-${index}`, tag: `${index}`, point }));
+		const added = this.points.map((point, index) => ({
+			id: `fill-${index}`,
+			tag: `${index}`,
+			point,
+			axisHeightM: this.editor.newAxisHeightM
+		}));
 		return addTrackers(base, model, added);
 	});
 
 	readonly cover = $derived.by(() => (this.layout ? groundCover(this.editor.store.plot, this.layout) : null));
-	readonly leastM = $derived.by(() => (this.editor.model ? leastPitchM(this.editor.model) : 0));
 
 	useUsual(model: TrackerModel): void {
 		const { eastWestM, northSouthM } = usualPitch(model);

@@ -1,6 +1,7 @@
-import { leastPitchM, rowPoints, type PlanPoint } from '$lib/core';
+import { leastPitchM, reachRadiusM, rowPoints, type PlanPoint } from '$lib/core';
 import type { Editor, ToolId } from '../editor.svelte';
 import { alignPoint } from '../kernels/align';
+import { leastAlongM } from '../kernels/fill-pitch';
 import { nearestFoot } from '../kernels/pick';
 import { LineTool } from './line-tool';
 import { PlaceTool } from './place-tool';
@@ -12,13 +13,19 @@ export type { GroundPointer, Tool } from './tool';
 /** Rows are kept to a size that a drag can't blow up by accident. */
 const longestRow = 500;
 
+/** Pitch of a row: the one typed, never so small that circles of the chosen model overlap; else the model's least. */
+export function rowPitchM(editor: Editor): number {
+	const { model, rowSpacing } = editor;
+	if (!model) return rowSpacing.pitchM;
+	if (rowSpacing.pitchM <= 0) return leastPitchM(model);
+	return Math.max(rowSpacing.pitchM, leastAlongM(2 * reachRadiusM(model)));
+}
+
 /** Points of the row that the editor's settings give along a line. */
 export function rowAlong(editor: Editor, from: PlanPoint, to: PlanPoint): PlanPoint[] {
-	const { by, pitchM, count } = editor.rowSpacing;
-	const { model } = editor;
-	if (!model) return [];
-	const pitch = pitchM > 0 ? pitchM : leastPitchM(model);
-	return rowPoints(from, to, by === 'pitch' ? { pitchM: pitch } : { count }).slice(0, longestRow);
+	const { by, count } = editor.rowSpacing;
+	if (!editor.model) return [];
+	return rowPoints(from, to, by === 'pitch' ? { pitchM: rowPitchM(editor) } : { count }).slice(0, longestRow);
 }
 
 function rowTool(editor: Editor): Tool {
