@@ -168,8 +168,8 @@ describe('layouts', () => {
 		expect((await callApi('GET', `/api/v1/layouts/${layoutId}`, { token })).body.document).toEqual(document);
 		const revisions = await callApi('GET', `/api/v1/layouts/${layoutId}/revisions`, { token });
 		expect(revisions.body.items).toMatchObject([
-			{ revision: 2, trackerCount: 6, savedBy: 'Owner' },
-			{ revision: 1, trackerCount: 0, savedBy: 'Owner' }
+			{ revision: 2, trackerCount: 6, savedBy: 'Owner', savedByYou: true },
+			{ revision: 1, trackerCount: 0, savedBy: 'Owner', savedByYou: true }
 		]);
 		const projects = await callApi('GET', '/api/v1/projects', { token });
 		expect(projects.body.items.find((one: { id: string }) => one.id === id).trackerCount).toBe(6);

@@ -26,7 +26,7 @@ describe('differences in words', () => {
 		expect(layoutDifferences(mine, theirs)).toEqual([
 			'The other version has 1 tracker (B1) that yours has not.',
 			'Yours has 1 tracker (A2) that the other version has not.',
-			'It has 1 tracker (A1) at another place.',
+			'Places differ: A1 by 4.0 m.',
 			'It has 1 tracker (A3) under another tag.'
 		]);
 	});

@@ -1,4 +1,5 @@
 import type { Layout, Plot, Tracker } from '$lib/core';
+import { formatMetres } from '$lib/i18n';
 import { sameData } from './same';
 
 const namedAtMost = 5;
@@ -35,7 +36,14 @@ export function layoutDifferences(mine: Layout, theirs: Layout): string[] {
 	};
 	say(tags(onlyTheirs), (what) => `The other version has ${what} that yours has not.`);
 	say(tags(onlyMine), (what) => `Yours has ${what} that the other version has not.`);
-	say(tags(moved.map(([own]) => own)), (what) => `It has ${what} at another place.`);
+	if (moved.length > 0) {
+		const places = moved.slice(0, namedAtMost).map(([own, their]) => {
+			const apartM = Math.hypot(own.eastM - their.eastM, own.northM - their.northM);
+			return `${own.tag} by ${formatMetres(apartM, apartM < 0.1 ? 3 : 1)}`;
+		});
+		const rest = moved.length > namedAtMost ? ` and ${moved.length - namedAtMost} more` : '';
+		lines.push(`Places differ: ${places.join(', ')}${rest}.`);
+	}
 	say(tags(renamed.map(([own]) => own)), (what) => `It has ${what} under another tag.`);
 	say(
 		tags(otherwise.map(([own]) => own)),

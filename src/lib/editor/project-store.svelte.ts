@@ -11,6 +11,7 @@ import {
 } from '$lib/core';
 import { FieldCache } from './field-cache';
 import { emptyHistory, recordStep, redoStep, undoStep, type History } from './history';
+import { mergeLayouts, mergePlots } from './kernels/merge-documents';
 import { Moment } from './moment.svelte';
 import { PreviewClient } from './preview-client';
 import type { Documents, ProjectData, ProjectInfo } from './project-data';
@@ -93,6 +94,7 @@ export class ProjectStore {
 
 	get saveState(): SaveState {
 		const states = [this.#plotSync.state, this.#layoutSync.state];
+		if (this.newerElsewhere) return 'stale';
 		return worstFirst.find((state) => states.includes(state)) ?? 'saved';
 	}
 
@@ -104,6 +106,11 @@ export class ProjectStore {
 	/** Why something is not saved, as a sentence. */
 	get saveMessage(): string | null {
 		return this.#layoutSync.message ?? this.#plotSync.message;
+	}
+
+	/** A newer revision of a document is stored and not shown here. */
+	get newerElsewhere(): boolean {
+		return this.#plotSync.newer !== null || this.#layoutSync.newer !== null;
 	}
 
 	get plotConflict() {
@@ -231,19 +238,56 @@ export class ProjectStore {
 		});
 	}
 
+	/** Asks whether a newer version was saved elsewhere; true when fresh page data can be taken over with nothing lost. */
+	async look(): Promise<boolean> {
+		const newer = await Promise.all([this.#plotSync.look(), this.#layoutSync.look()]);
+		return newer.includes(true) && this.#gesture === null;
+	}
+
+	/** Both versions in one, when neither changed what the other did; null when somebody must choose. */
+	readonly bothVersions = $derived.by((): Documents | null => {
+		const { conflict: plots } = this.#plotSync;
+		const { conflict: layouts } = this.#layoutSync;
+		if (!plots && !layouts) return null;
+		const plot = plots?.base ? mergePlots(plots.base, plots.mine, plots.theirs) : null;
+		const layout = layouts?.base ? mergeLayouts(layouts.base, layouts.mine, layouts.theirs) : null;
+		if ((plots && !plot?.ok) || (layouts && !layout?.ok)) return null;
+		return {
+			plot: plot?.ok ? plot.value : this.plot,
+			layout: layout?.ok ? layout.value : this.layout
+		};
+	});
+
+	/** Shows and saves both versions in one; mine alone stays one undo away. */
+	async keepBoth(): Promise<void> {
+		const both = this.bothVersions;
+		if (!both) return;
+		this.cancel();
+		const before = this.#documents();
+		this.#show(both);
+		this.#history = recordStep(this.#history, {
+			label: 'Keep both versions',
+			before,
+			after: both,
+			mergeKey: null,
+			atMs: Date.now()
+		});
+		await Promise.all([this.#plotSync.settleWith(both.plot), this.#layoutSync.settleWith(both.layout)]);
+	}
+
 	/** Takes over freshly loaded page data: always the project's facts, documents only when they are newer and nothing is pending. */
 	adopt(data: ProjectData): void {
 		this.project = data.project;
 		this.models = data.models ?? this.models;
 		const plotIsNewer = data.plot.revision > this.plotRevision && !this.#plotSync.hasPending;
 		if (plotIsNewer && !this.#gesture) {
-			this.#plotSync.adopt(data.plot.revision);
+			this.#plotSync.adopt(data.plot.revision, data.plot.document);
 			this.plot = data.plot.document;
 			this.#history = emptyHistory();
 		}
 		if (data.layout.id !== this.layoutId) this.#openLayout(data);
 		else if (data.layout.revision > this.layoutRevision && !this.#layoutSync.hasPending && !this.#gesture) {
-			this.#layoutSync.adopt(data.layout.revision);
+			this.#layoutSync.adopt(data.layout.revision, data.layout.document);
 			this.layout = data.layout.document;
 			this.#history = emptyHistory();
 		}
@@ -369,7 +413,8 @@ export class ProjectStore {
 			transport: httpTransport<Plot>(`/api/v1/projects/${data.project.id}/plot`),
 			storage: deviceStorage(),
 			storageKey: `tiltyard.pending.${this.#userId}.plot.${data.project.id}`,
-			revision: data.plot.revision
+			revision: data.plot.revision,
+			document: data.plot.document
 		});
 	}
 
@@ -378,7 +423,8 @@ export class ProjectStore {
 			transport: httpTransport<Layout>(`/api/v1/layouts/${data.layout.id}`),
 			storage: deviceStorage(),
 			storageKey: `tiltyard.pending.${this.#userId}.layout.${data.layout.id}`,
-			revision: data.layout.revision
+			revision: data.layout.revision,
+			document: data.layout.document
 		});
 	}
 }

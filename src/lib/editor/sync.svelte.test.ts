@@ -38,13 +38,18 @@ class FakeServer implements Transport<Doc> {
 		return { kind: 'saved', revision: this.stored.revision };
 	}
 
+	async revision(): Promise<number | null> {
+		return this.reachable ? this.stored.revision : null;
+	}
+
 	async load(): Promise<Stored<Doc> | null> {
 		return this.reachable ? this.stored : null;
 	}
 }
 
 function sync(server: FakeServer, storage: CopyStorage, revision = server.stored.revision) {
-	return new DocumentSync<Doc>({ transport: server, storage, storageKey: 'copy', revision });
+	const { document } = server.stored;
+	return new DocumentSync<Doc>({ transport: server, storage, storageKey: 'copy', revision, document });
 }
 
 describe('DocumentSync', () => {
@@ -164,6 +169,33 @@ describe('DocumentSync', () => {
 		expect(it.revision).toBe(2);
 	});
 
+	it('knows a newer revision when it looks, and takes it over as asked', async () => {
+		const server = new FakeServer();
+		const it = sync(server, memoryStorage());
+		expect(await it.look()).toBe(false);
+		server.stored = { document: { text: 'theirs' }, revision: 2 };
+		expect(await it.look()).toBe(true);
+		expect(it.newer).toBe(2);
+		it.adopt(2, server.stored.document);
+		expect(it.newer).toBeNull();
+		expect(it.state).toBe('saved');
+		server.reachable = false;
+		expect(await it.look()).toBe(false);
+	});
+
+	it('asks which version goes on when it looks while work waits, and saves both in one', async () => {
+		const server = new FakeServer();
+		const it = sync(server, memoryStorage());
+		server.stored = { document: { text: 'theirs' }, revision: 2 };
+		it.changed({ text: 'mine' });
+		expect(await it.look()).toBe(false);
+		expect(it.conflict?.base).toEqual({ text: 'first' });
+		await it.settleWith({ text: 'theirs and mine' });
+		expect(server.stored).toEqual({ document: { text: 'theirs and mine' }, revision: 3 });
+		expect(it.newer).toBeNull();
+		expect(it.state).toBe('saved');
+	});
+
 	it('stops and asks when somebody else was first; keeping mine overwrites theirs', async () => {
 		const server = new FakeServer();
 		const it = sync(server, memoryStorage());
@@ -171,7 +203,12 @@ describe('DocumentSync', () => {
 		it.changed({ text: 'mine' });
 		await vi.advanceTimersByTimeAsync(700);
 		expect(it.state).toBe('stale');
-		expect(it.conflict).toEqual({ mine: { text: 'mine' }, theirs: { text: 'theirs' }, theirRevision: 2 });
+		expect(it.conflict).toEqual({
+			mine: { text: 'mine' },
+			theirs: { text: 'theirs' },
+			theirRevision: 2,
+			base: { text: 'first' }
+		});
 		it.changed({ text: 'mine too' });
 		await vi.advanceTimersByTimeAsync(5000);
 		expect(server.stored.document.text).toBe('theirs');

@@ -9,6 +9,8 @@ export interface Conflict<T> {
 	mine: T;
 	theirs: T;
 	theirRevision: number;
+	/** What both grew from; null when that is not known any more. */
+	base: T | null;
 }
 
 interface SyncOptions<T> {
@@ -17,6 +19,8 @@ interface SyncOptions<T> {
 	storage: CopyStorage | null;
 	storageKey: string;
 	revision: number;
+	/** What is stored at this revision. */
+	document?: T;
 	/** Quiet time after an edit before it is sent. */
 	delayMs?: number;
 }
@@ -37,12 +41,16 @@ export class DocumentSync<T> {
 	message = $state<string | null>(null);
 	conflict = $state.raw<Conflict<T> | null>(null);
 	revision = $state(0);
+	/** A newer revision that was saved elsewhere and is not shown here; null when none is known. */
+	newer = $state<number | null>(null);
 	/** False while this device has no room for a copy: closing the page would then lose what is not saved. */
 	kept = $state(true);
 
 	/** States that were sent on this revision without an answer: the server may hold one of them. */
 	#unanswered: T[] = [];
 	#pending: T | null = null;
+	/** The document of `revision`. */
+	#base: T | null;
 	#busy = false;
 	#timer: ReturnType<typeof setTimeout> | null = null;
 	#retryMs = firstRetryMs;
@@ -55,6 +63,7 @@ export class DocumentSync<T> {
 		this.#copies = new PendingCopyStore(options.storage, options.storageKey);
 		this.#delayMs = options.delayMs ?? 700;
 		this.revision = options.revision;
+		this.#base = options.document ?? null;
 	}
 
 	get hasPending(): boolean {
@@ -94,7 +103,7 @@ export class DocumentSync<T> {
 			this.state = 'unsaved';
 			this.#schedule(0);
 		} else {
-			this.#stop({ mine: copy.document, theirs: current, theirRevision: this.revision });
+			this.#stop({ mine: copy.document, theirs: current, theirRevision: this.revision, base: null });
 		}
 		return copy.document;
 	}
@@ -127,10 +136,17 @@ export class DocumentSync<T> {
 
 	/** Overwrites the other version with mine. */
 	async keepMine(): Promise<void> {
+		if (this.conflict) await this.settleWith(this.conflict.mine);
+	}
+
+	/** Saves a document over the other version: mine, or both in one. */
+	async settleWith(document: T): Promise<void> {
 		if (!this.conflict) return;
 		this.revision = this.conflict.theirRevision;
-		this.#pending = this.conflict.mine;
+		this.#base = this.conflict.theirs;
+		this.#pending = document;
 		this.conflict = null;
+		this.newer = null;
 		this.#keepCopy(this.#pending);
 		this.state = 'unsaved';
 		await this.flush();
@@ -140,14 +156,29 @@ export class DocumentSync<T> {
 	takeTheirs(): Stored<T> | null {
 		if (!this.conflict) return null;
 		const { theirs, theirRevision } = this.conflict;
-		this.adopt(theirRevision);
+		this.adopt(theirRevision, theirs);
 		return { document: theirs, revision: theirRevision };
 	}
 
 	/** The page has the document of this revision now, with nothing pending. */
-	adopt(revision: number): void {
+	adopt(revision: number, document: T): void {
+		this.#base = document;
 		this.#settle(revision);
 		this.#copies.drop();
+	}
+
+	/**
+	 * Asks whether a newer revision was saved elsewhere. Answers true when there is one and nothing of ours waits to be saved; else
+	 * what waits is sent, which ends in the choice between the two.
+	 */
+	async look(): Promise<boolean> {
+		if (this.#busy || this.conflict) return false;
+		const stored = await this.#transport.revision();
+		if (stored === null || stored <= this.revision || this.#busy || this.conflict) return false;
+		this.newer = stored;
+		if (this.#pending === null) return true;
+		await this.flush();
+		return false;
 	}
 
 	/** Stops the clockwork; the copy on the device stays. */
@@ -174,10 +205,11 @@ export class DocumentSync<T> {
 		this.#retryMs = firstRetryMs;
 		this.#unanswered = [];
 		if (this.#pending === sent) {
-			this.adopt(revision);
+			this.adopt(revision, sent);
 			return;
 		}
 		this.revision = revision;
+		this.#base = sent;
 		this.message = null;
 		if (this.#pending !== null) this.#keepCopy(this.#pending);
 		this.state = 'unsaved';
@@ -191,19 +223,25 @@ export class DocumentSync<T> {
 		else if (this.#unanswered.some((earlier) => sameData(stored.document, earlier))) {
 			this.#unanswered = [];
 			this.revision = stored.revision;
+			this.#base = stored.document;
 			this.#retryMs = firstRetryMs;
 			this.#keepCopy(this.#pending ?? sent);
 			this.message = null;
 			this.state = 'unsaved';
 		} else
-			this.#stop({ mine: this.#pending ?? sent, theirs: stored.document, theirRevision: stored.revision });
+			this.#stop({
+				mine: this.#pending ?? sent,
+				theirs: stored.document,
+				theirRevision: stored.revision,
+				base: this.#base
+			});
 	}
 
 	#stop(conflict: Conflict<T>): void {
 		this.#cancelTimer();
 		this.conflict = conflict;
 		this.state = 'stale';
-		this.message = 'Somebody else saved a newer version. Choose which one to keep.';
+		this.message = 'A newer version was saved elsewhere. Choose what goes on.';
 	}
 
 	#retryLater(message: string): void {
@@ -221,6 +259,7 @@ export class DocumentSync<T> {
 		this.conflict = null;
 		this.message = null;
 		this.revision = revision;
+		if (this.newer !== null && this.newer <= revision) this.newer = null;
 		this.state = 'saved';
 	}
 

@@ -16,6 +16,8 @@ export interface Stored<T> {
 export interface Transport<T> {
 	save(document: T, revision: number): Promise<SaveOutcome>;
 	load(): Promise<Stored<T> | null>;
+	/** The revision that is stored now; null when no answer came. */
+	revision(): Promise<number | null>;
 }
 
 interface Problem {
@@ -85,6 +87,16 @@ export function httpTransport<T>(url: string, fetcher: typeof fetch = fetch): Tr
 				return { document: answer.document, revision: answer.revision };
 			} catch {
 				// No answer: the caller stays as it is and asks again.
+				return null;
+			}
+		},
+		async revision() {
+			try {
+				const response = await fetcher(url, { method: 'HEAD', cache: 'no-store' });
+				const tag = /^(?:W\/)?"(\d+)"$/.exec(response.headers.get('etag') ?? '');
+				return response.ok && tag ? Number(tag[1]) : null;
+			} catch {
+				// No answer: whether there is something newer is asked again at the next look.
 				return null;
 			}
 		}

@@ -106,6 +106,8 @@ export const layoutRevisionSchema = z.strictObject({
 	revision: z.number().int(),
 	trackerCount: z.number().int(),
 	savedBy: z.string().nullable(),
+	/** Whether whoever asks saved it. */
+	savedByYou: z.boolean(),
 	savedAt: moment
 });
 export type LayoutRevision = z.infer<typeof layoutRevisionSchema>;

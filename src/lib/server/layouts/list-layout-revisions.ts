@@ -21,6 +21,7 @@ export async function listLayoutRevisions(
 			revision: layoutRevisions.revision,
 			trackerCount: layoutRevisions.trackerCount,
 			savedBy: users.name,
+			authorId: layoutRevisions.authorId,
 			savedAt: layoutRevisions.createdAt
 		})
 		.from(layoutRevisions)
@@ -36,7 +37,11 @@ export async function listLayoutRevisions(
 	return pageOf(
 		rows,
 		query.limit,
-		(row): LayoutRevision => ({ ...row, savedAt: row.savedAt.toISOString() }),
+		({ authorId, ...row }): LayoutRevision => ({
+			...row,
+			savedByYou: authorId === actor.userId,
+			savedAt: row.savedAt.toISOString()
+		}),
 		(row) => [row.revision]
 	);
 }
