@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import {
+	fineWindName,
 	formatArea,
 	formatBearing,
 	formatCoordinates,
@@ -39,6 +40,12 @@ describe('numbers in words and figures', () => {
 		expect(formatBearing(7.25, 1)).toBe('007.3°');
 		expect(windName(350)).toBe('north');
 		expect(windName(133)).toBe('south-east');
+		// The compass card: each of the sixteen winds holds 22.5 degrees about its own bearing.
+		expect(fineWindName(20)).toBe('north-north-east');
+		expect(fineWindName(11)).toBe('north');
+		expect(fineWindName(349)).toBe('north');
+		expect(fineWindName(-90)).toBe('west');
+		expect(fineWindName(236.3)).toBe('west-south-west');
 	});
 
 	it('write coordinates with letters', () => {

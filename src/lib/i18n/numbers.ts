@@ -51,6 +51,30 @@ export function windName(bearingDeg: number): string {
 	return windNames[Math.round((((bearingDeg % 360) + 360) % 360) / 45) % 8];
 }
 
+const sixteenWinds = [
+	'north',
+	'north-north-east',
+	'north-east',
+	'east-north-east',
+	'east',
+	'east-south-east',
+	'south-east',
+	'south-south-east',
+	'south',
+	'south-south-west',
+	'south-west',
+	'west-south-west',
+	'west',
+	'west-north-west',
+	'north-west',
+	'north-north-west'
+];
+
+/** The nearest of the sixteen winds of a bearing clockwise from true north. */
+export function fineWindName(bearingDeg: number): string {
+	return sixteenWinds[Math.round((((bearingDeg % 360) + 360) % 360) / 22.5) % 16];
+}
+
 /** A bearing clockwise from true north as three whole digits, `007°`, or with decimals, `007.5°`. */
 export function formatBearing(bearingDeg: number, digits = 0): string {
 	if (!Number.isFinite(bearingDeg)) return '–';

@@ -23,6 +23,12 @@ describe('checks of a ring', () => {
 		expect(ringProblemSentence(problem)).toContain('5.0 m east, 5.0 m north');
 	});
 
+	it('write no negative zero', () => {
+		const words = ringProblemSentence({ kind: 'crosses', edges: [1, 3], at: [-0.04, -0.06] });
+		expect(words).toContain('0.0 m east, -0.1 m north');
+		expect(words).not.toContain('-0.0');
+	});
+
 	it('find a corner that lies on another edge, a corner used twice and an edge that runs back', () => {
 		expect(
 			ringProblems([

@@ -173,7 +173,9 @@ export function ringDistance(point: PlanPoint, ring: PlanPoint[]): number {
 
 /** The problem in a sentence with its remedy; `of` names the ring, for example "The outline". */
 export function ringProblemSentence(problem: RingProblem, of = 'The outline'): string {
-	const at = (point: PlanPoint) => `${point[0].toFixed(1)} m east, ${point[1].toFixed(1)} m north`;
+	// Adding 0 turns the negative zero of a rounded −0.04 into a plain one.
+	const decimetres = (valueM: number) => (Math.round(valueM * 10) / 10 + 0).toFixed(1);
+	const at = (point: PlanPoint) => `${decimetres(point[0])} m east, ${decimetres(point[1])} m north`;
 	switch (problem.kind) {
 		case 'too-few-corners':
 			return `${of} has ${problem.corners} corner${problem.corners === 1 ? '' : 's'}: give at least three.`;

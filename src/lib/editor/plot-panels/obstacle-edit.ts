@@ -53,3 +53,10 @@ export function treeHeightIn(tree: TreeObstacle, years: number): number {
 export function planRadiusM(obstacle: Obstacle): number {
 	return obstacle.kind === 'tree' ? obstacle.crownRadiusM : Math.hypot(obstacle.sizeXM, obstacle.sizeYM) / 2;
 }
+
+/** How far an obstacle reaches south of its middle in plan, metres, however it is turned: its name stands below that. */
+export function southReachM(obstacle: Obstacle): number {
+	if (obstacle.kind === 'tree') return obstacle.crownRadiusM;
+	const turn = (obstacle.turnDeg * Math.PI) / 180;
+	return (Math.abs(obstacle.sizeXM * Math.sin(turn)) + Math.abs(obstacle.sizeYM * Math.cos(turn))) / 2;
+}

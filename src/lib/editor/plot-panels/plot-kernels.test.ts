@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { groundHeightM, type Ground, type Plot } from '$lib/core';
+import { groundHeightM, longestDate, shortestDate, sunDay, type Ground, type Plot } from '$lib/core';
 import { emptyPlot } from '$lib/schema';
 import {
 	boundaryProblem,
@@ -10,7 +10,8 @@ import {
 	turnRings
 } from './boundary-edit';
 import { contoursOf, groundRange } from './contours';
-import { newBox, newTree, treeHeightIn } from './obstacle-edit';
+import { newBox, newTree, southReachM, treeHeightIn } from './obstacle-edit';
+import { widestRadiusM } from './room-inside';
 import { sunPath } from './sun-paths';
 
 function withSquare(): Plot {
@@ -132,6 +133,57 @@ describe('obstacles', () => {
 		expect(treeHeightIn(tree, 10)).toBeCloseTo(13, 9);
 		expect(treeHeightIn(tree, 30)).toBe(14);
 	});
+
+	it('reach as far south as their turned corners', () => {
+		const box = { ...newBox('a', [0, 0], []), sizeXM: 10, sizeYM: 6 };
+		expect(southReachM(box)).toBeCloseTo(3, 9);
+		expect(southReachM({ ...box, turnDeg: 90 })).toBeCloseTo(5, 9);
+		// (10 + 6) / 2 times the sine of 45 degrees.
+		expect(southReachM({ ...box, turnDeg: -45 })).toBeCloseTo(8 * Math.SQRT1_2, 9);
+	});
+});
+
+describe('the room inside a boundary', () => {
+	const part = (outer: [number, number][], holes: [number, number][][] = []) => [{ outer, holes }];
+	const square: [number, number][] = [
+		[0, 0],
+		[20, 0],
+		[20, 20],
+		[0, 20]
+	];
+
+	it('is the radius of the largest circle that fits: half the side of a square, (a + b - c) / 2 in a right triangle', () => {
+		expect(widestRadiusM(part(square))).toBeCloseTo(10, 1);
+		expect(
+			widestRadiusM(
+				part([
+					[0, 0],
+					[40, 0],
+					[0, 30]
+				])
+			)
+		).toBeCloseTo(10, 1);
+	});
+
+	it('keeps clear of holes and takes the widest of several parts', () => {
+		const hole: [number, number][] = [
+			[9.9, 9.9],
+			[9.9, 10.1],
+			[10.1, 10.1],
+			[10.1, 9.9]
+		];
+		// In the corner of the square: r sqrt2 + r = distance of the corner from the hole's own, 9.9 sqrt2.
+		expect(widestRadiusM(part(square, [hole]))).toBeCloseTo((9.9 * Math.SQRT2) / (1 + Math.SQRT2), 1);
+		const strip = part([
+			[0, 50],
+			[60, 50],
+			[60, 54],
+			[0, 54]
+		]);
+		expect(widestRadiusM([...strip, ...part(square)])).toBeCloseTo(10, 1);
+		expect(widestRadiusM(strip)).toBeCloseTo(2, 1);
+		expect(widestRadiusM([])).toBe(0);
+	});
 });
 
 describe('the sun behind the skyline', () => {
@@ -154,5 +206,25 @@ describe('the sun behind the skyline', () => {
 		expect(path.lostMinutes).toBeGreaterThanOrEqual(40);
 		expect(path.lostMinutes).toBeLessThanOrEqual(46);
 		expect(sunPath('2026-03-20', place, 0, []).lostMinutes).toBe(0);
+	});
+
+	it('has the length of day that every other page gives', () => {
+		const farm = { ...place, latitudeDeg: 43.75, longitudeDeg: 4.85 };
+		for (const date of [shortestDate(43.75, 2026), longestDate(43.75, 2026)]) {
+			const day = sunDay(date, farm, 60);
+			expect(sunPath(date, farm, 60, []).upMinutes).toBeCloseTo((day.setMs! - day.riseMs!) / 60_000, 9);
+		}
+	});
+
+	it('is lost altogether behind a wall, all day in polar summer and not at all in polar night', () => {
+		const wall = [
+			{ azimuthDeg: 0, elevationDeg: 60 },
+			{ azimuthDeg: 180, elevationDeg: 60 }
+		];
+		const farNorth = { ...place, latitudeDeg: 75 };
+		const summer = sunPath('2026-06-21', farNorth, 0, wall);
+		expect([summer.upMinutes, summer.lostMinutes]).toEqual([1440, 1440]);
+		const winter = sunPath('2026-12-21', farNorth, 0, wall);
+		expect([winter.upMinutes, winter.lostMinutes, winter.points.length]).toEqual([0, 0, 0]);
 	});
 });

@@ -1,7 +1,7 @@
 import {
-	dayStartMs,
 	prepareSkyline,
 	skylineHeightDeg,
+	sunDay,
 	sunPosition,
 	type Place,
 	type SkylinePoint
@@ -21,9 +21,22 @@ export interface SunPath {
 	lostMinutes: number;
 }
 
+/** Steps are this long or a little shorter, so that a whole number of them fills the day. */
 const STEP_MINUTES = 2;
+const MINUTE_MS = 60_000;
 
-/** The sun's way over one day of the site and what the skyline takes of it; apparent elevation, mid-interval steps of 2 minutes. */
+/** From rise to set, the upper limb on a level horizon; the whole of a polar day, nothing of a polar night. */
+function sunUp(date: string, place: Place, utcOffsetMinutes: number): [fromMs: number, toMs: number] {
+	const day = sunDay(date, place, utcOffsetMinutes);
+	if (day.kind === 'polar-night') return [day.transitMs, day.transitMs];
+	const halfDayMs = 720 * MINUTE_MS;
+	return [day.riseMs ?? day.transitMs - halfDayMs, day.setMs ?? day.transitMs + halfDayMs];
+}
+
+/**
+ * The sun's way over one day of the site, in mid-interval steps, and what the skyline takes of it. The sun counts as hidden by its
+ * centre at apparent elevation; in the minutes when only its upper limb is up, the centre is taken to stand on the horizon.
+ */
 export function sunPath(
 	date: string,
 	place: Place,
@@ -31,17 +44,20 @@ export function sunPath(
 	skyline: readonly SkylinePoint[]
 ): SunPath {
 	const prepared = prepareSkyline(skyline);
-	const startMs = dayStartMs(date, utcOffsetMinutes);
+	const [fromMs, toMs] = sunUp(date, place, utcOffsetMinutes);
+	const upMinutes = (toMs - fromMs) / MINUTE_MS;
+	const steps = Math.ceil(upMinutes / STEP_MINUTES);
 	const points: PathPoint[] = [];
 	let lost = 0;
-	for (let minute = STEP_MINUTES / 2; minute < 1440; minute += STEP_MINUTES) {
-		const sun = sunPosition(startMs + minute * 60_000, place.latitudeDeg, place.longitudeDeg);
-		if (sun.apparentElevationDeg <= 0) continue;
-		const hidden = sun.apparentElevationDeg < skylineHeightDeg(prepared, sun.azimuthDeg);
+	for (let step = 0; step < steps; step += 1) {
+		const timeMs = fromMs + ((step + 0.5) / steps) * (toMs - fromMs);
+		const sun = sunPosition(timeMs, place.latitudeDeg, place.longitudeDeg);
+		const elevationDeg = Math.max(0, sun.apparentElevationDeg);
+		const hidden = elevationDeg < skylineHeightDeg(prepared, sun.azimuthDeg);
 		if (hidden) lost += 1;
-		points.push({ azimuthDeg: sun.azimuthDeg, elevationDeg: sun.apparentElevationDeg, hidden });
+		points.push({ azimuthDeg: sun.azimuthDeg, elevationDeg, hidden });
 	}
-	return { date, points, upMinutes: points.length * STEP_MINUTES, lostMinutes: lost * STEP_MINUTES };
+	return { date, points, upMinutes, lostMinutes: steps === 0 ? 0 : (lost / steps) * upMinutes };
 }
 
 export interface NamedPath {

@@ -15,9 +15,9 @@ const horizonPart = 0.47;
 const feet: readonly [aheadM: number, rightM: number][] = [
 	[24, -3.4],
 	[31, 8],
-	[46, -7.5],
+	[46, -17],
 	[52, 5.5],
-	[58, 19]
+	[60, 26]
 ];
 
 /** Some tables that face a low sun before the eye, which so looks on their backs, with the shadows coming towards it. */
