@@ -65,8 +65,18 @@ describe('the trail', () => {
 		expect(step('shade', { shade: { status: 'failed', outOfDate: false } })?.next).toContain('failed');
 	});
 
-	it('keeps plan and site out of reach of a client', () => {
-		const reachable = trailSteps({ ...fresh, role: 'client' }).filter((each) => each.reachable);
-		expect(reachable.map((each) => each.key)).toEqual(['plot', 'trackers', 'shade', 'sensors']);
+	it('leads a client past plan and site, and the crew to both', () => {
+		const keys = (role: TrailFacts['role']) => trailSteps({ ...fresh, role }).map((each) => each.key);
+		expect(keys('client')).toEqual(['plot', 'trackers', 'shade', 'sensors']);
+		expect(keys('crew')).toContain('site');
+	});
+
+	it('tells those who may not edit how things stand, not what to do', () => {
+		for (const role of ['client', 'crew'] as const) {
+			for (const each of trailSteps({ ...fresh, role })) expect(each.next).not.toMatch(/^Next/);
+		}
+		expect(step('shade', { role: 'client', shade: done, winterRuleBrokenBy: 2 })?.next).toContain(
+			'2 trackers'
+		);
 	});
 });

@@ -12,8 +12,6 @@ export interface TrailStep {
 	count: number;
 	/** One line of what is next, or of what stands. */
 	next: string;
-	/** False where the role may not look. */
-	reachable: boolean;
 }
 
 interface RunFacts {
@@ -121,14 +119,16 @@ const steps: { key: StepKey; label: string; tell: (facts: TrailFacts) => Told }[
 	{ key: 'site', label: 'Site', tell: site }
 ];
 
-/** The walk along the job, in the job's order. */
+/** The walk along the job, in the job's order; steps that a role may not open are not on its way. */
 export function trailSteps(facts: TrailFacts): TrailStep[] {
 	const readsPlans = can(facts.role, 'plan.read');
-	return steps.map(({ key, label, tell }) => ({
-		key,
-		label,
-		count: 0,
-		...tell(facts),
-		reachable: readsPlans || (key !== 'plan' && key !== 'site')
-	}));
+	return steps
+		.filter(({ key }) => readsPlans || (key !== 'plan' && key !== 'site'))
+		.map(({ key, label, tell }) => ({ key, label, count: 0, ...asRead(tell(facts), facts.role) }));
+}
+
+/** Who may not edit is told how things stand, not what to do next. */
+function asRead(told: Told, role: Role): Told {
+	if (can(role, 'layout.edit') || !told.next.startsWith('Next: ')) return told;
+	return { ...told, next: told.state === 'nothing' ? 'The designer has not begun this yet.' : 'Still open.' };
 }

@@ -13,7 +13,7 @@ export const load: PageServerLoad = async (event) => {
 	if (!can(project.role, 'plan.read')) {
 		error(
 			403,
-			'Plans are for the people who issue and build them. Your pages are Plot, Trackers, Shade and Sensors.'
+			'Plans are for the project’s owner, its designers and its crew, who build from them. As a client you see Plot, Trackers, Shade and Sensors.'
 		);
 	}
 	if (!can(project.role, 'plan.issue')) return { draft: null };

@@ -10,7 +10,10 @@ export const load: PageServerLoad = async (event) => {
 	const actor = requireUser(event);
 	const { project } = await event.parent();
 	if (!can(project.role, 'plan.read')) {
-		error(403, 'Site pages are for the crew. Your pages are Plot, Trackers, Shade and Sensors.');
+		error(
+			403,
+			'Site is for the project’s crew, its owner and its designers. As a client you see Plot, Trackers, Shade and Sensors.'
+		);
 	}
 	return { valid: await orPageError(validPlan(actor, project.id)) };
 };
