@@ -24,6 +24,9 @@ test.describe('the sensors page', () => {
 		await expect(page.getByRole('heading', { name: /^Why it is (Clear|Sound|Watch|Unfit)/ })).toBeVisible();
 		expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
 
+		await expect(
+			page.getByRole('button', { name: 'Use the place you look at for the whole field' })
+		).toBeEnabled();
 		await page.getByRole('button', { name: 'Use this mount for the field' }).click();
 		await expect(page.getByTestId('saved-choice')).toContainText('Chosen for the field');
 		await expect.poll(async () => (await storedLayout(page, layoutId)).mounts.common !== null).toBe(true);

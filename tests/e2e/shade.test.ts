@@ -75,14 +75,38 @@ test.describe('the shade page', () => {
 		await expect(page.getByTestId('year-result')).toBeHidden();
 	});
 
-	test('refuses a year out of range, keeps what was typed and says the range', async ({ page }) => {
+	test('starts no run while a field is refused, keeps what was typed and says why', async ({ page }) => {
 		await signIn(page, 'designer@tiltyard.test');
 		const { projectId } = await makeSmallField(page);
 		await page.goto(`/projects/${projectId}/shade`);
 		const year = page.getByRole('textbox', { name: 'Year' });
-		await year.fill('19');
+		await expect(page.getByTestId('verdict')).toBeVisible();
+		let asked = 0;
+		page.on('request', (request) => {
+			if (request.method() === 'POST' && request.url().endsWith('/runs')) asked += 1;
+		});
+		await year.fill('3000');
 		await year.press('Enter');
-		await expect(year).toHaveValue('19');
+		await expect(year).toHaveValue('3000');
 		await expect(year).toHaveAttribute('aria-invalid', 'true');
+		await page.getByRole('button', { name: 'Compute the year' }).click();
+		await expect(page.getByText('Nothing was started')).toBeVisible();
+		await expect(year).toBeFocused();
+		await page.getByRole('button', { name: 'Compute the whole year' }).click();
+		await expect(year).toBeFocused();
+		expect(asked).toBe(0);
+
+		// Mended, the button beside the verdict starts it.
+		await year.fill('2027');
+		await year.press('Enter');
+		await expect(page.getByText('Nothing was started')).toBeHidden();
+		await page.getByRole('button', { name: 'Compute the whole year' }).click();
+		await expect(page.getByTestId('year-result')).toBeVisible({ timeout: 60_000 });
+		expect(asked).toBe(1);
+		await expect(page.getByRole('button', { name: 'Compute the whole year' })).toBeHidden();
+
+		// The sensors are asked for the same year unless told otherwise.
+		await page.goto(`/projects/${projectId}/sensors`);
+		await expect(page.getByRole('textbox', { name: 'Year' })).toHaveValue('2027');
 	});
 });
