@@ -105,6 +105,18 @@ describe('a plan', () => {
 		expect(await isMountRunOf(projectId, layoutId, null)).toBe(true);
 	});
 
+	it('draws trackers at the axis height that the layout sets, not at the model’s own', async () => {
+		const raised = structuredClone(field.layout);
+		const heightM = raised.models[0].axisHeightM + 0.2;
+		for (const tracker of raised.trackers) tracker.axisHeightM = heightM;
+		await draw(raised);
+		const { sheets } = await draftPlan(owner, projectId, layoutId);
+		const number = sheets.findIndex((sheet) => sheet.name === 'Sensor mount') + 1;
+		const svg = await draftSheetSvg(owner, projectId, layoutId, number);
+		expect(svg).toContain(`${heightM.toFixed(2)} m above ground`);
+		await draw();
+	});
+
 	it('gets letters in order, holds its files with their hashes, and the crew reads them', async () => {
 		const first = await issuePlan(owner, projectId, { layoutId, reason: 'Pegging starts' });
 		const second = await issuePlan(owner, projectId, { layoutId, reason: 'Again' });
