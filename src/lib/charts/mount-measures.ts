@@ -39,7 +39,7 @@ function classOfMeasure(place: MountPlaceResult, key: (typeof MOUNT_MEASURES)[nu
 }
 
 const meanings: Record<string, string> = {
-	blindHours: 'blind: the head, the eye of the sensor, is shaded while its own table has sun',
+	blindHours: 'the head, the eye of the sensor, in shade',
 	runUpWorstMinutes: 'run-up: from the first sun on the table until the head has it'
 };
 
