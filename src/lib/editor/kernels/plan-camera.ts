@@ -74,3 +74,29 @@ export function fitBox(camera: PlanCamera, box: PlanBox, margins: Margins): Plan
 		northM: (box.southM + box.northM) / 2 - (margins.bottom - margins.top) / 2 / pxPerM
 	};
 }
+
+/** A scale at which tables and tags are read with ease, pixels per metre. */
+const readablePxPerM = 12;
+/** Ground that is seen around what is framed: its circles and what stands next to them, metres. */
+const aroundM = 8;
+
+/**
+ * Brings a few things into the picture, inside the margins, at a scale that can be read: nearer when that is possible, further off
+ * only as far as it takes to see all of them.
+ */
+export function frameBox(camera: PlanCamera, box: PlanBox, margins: Margins): PlanCamera {
+	const around = {
+		westM: box.westM - aroundM,
+		eastM: box.eastM + aroundM,
+		southM: box.southM - aroundM,
+		northM: box.northM + aroundM
+	};
+	const fit = fitBox(camera, around, margins);
+	const pxPerM = Math.min(fit.pxPerM, Math.max(camera.pxPerM, readablePxPerM));
+	return {
+		...fit,
+		pxPerM,
+		eastM: (box.westM + box.eastM) / 2 + (margins.right - margins.left) / 2 / pxPerM,
+		northM: (box.southM + box.northM) / 2 - (margins.bottom - margins.top) / 2 / pxPerM
+	};
+}

@@ -94,6 +94,23 @@ export function projectFrom(
 	];
 }
 
+/** As `fitPoints`, with room kept free on the left and on the right for what lies over the picture, pixels. */
+export function fitBeside(
+	camera: SpaceCamera,
+	points: readonly Vec3[],
+	margin: number,
+	room: { leftPx: number; rightPx: number }
+): SpaceCamera {
+	const freePx = Math.max(40, camera.widthPx - room.leftPx - room.rightPx);
+	const narrow = fitPoints({ ...camera, widthPx: freePx }, points, margin);
+	const shiftM = ((room.rightPx - room.leftPx) / 2) * metresPerPx(narrow);
+	return {
+		...narrow,
+		widthPx: camera.widthPx,
+		target: plus(narrow.target, cameraFrame(narrow).right, shiftM)
+	};
+}
+
 export function turnBy(camera: SpaceCamera, dx: number, dy: number): SpaceCamera {
 	return {
 		...camera,
