@@ -1,6 +1,6 @@
 import type { Layout, Plot, Tracker } from '$lib/core';
 import { formatMetres } from '$lib/i18n';
-import { sameData } from './same';
+import { sameData } from './kernels/same';
 
 const namedAtMost = 5;
 

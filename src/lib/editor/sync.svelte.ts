@@ -1,5 +1,5 @@
 import { PendingCopyStore, type CopyStorage } from './pending-copy';
-import { sameData } from './same';
+import { sameData } from './kernels/same';
 import type { Stored, Transport } from './transport';
 
 export type SaveState = 'saved' | 'saving' | 'unsaved' | 'offline' | 'stale';

@@ -1,4 +1,4 @@
-import { sameData } from '../same';
+import { sameData } from './same';
 
 /**
  * Merging two versions that grew from one: what only one side changed is taken from that side. `undefined` stands for a thing that
