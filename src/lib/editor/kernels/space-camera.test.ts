@@ -3,7 +3,7 @@ import type { BoundaryPart, Vec3 } from '$lib/core';
 import { contourLines } from './contours';
 import { groundPlane } from './ground-shadow';
 import { rayToGround } from './ray-pick';
-import { fitPoints, project, rayAt, slideBy, turnBy, type SpaceCamera } from './space-camera';
+import { fitBeside, fitPoints, project, rayAt, slideBy, turnBy, type SpaceCamera } from './space-camera';
 
 const camera: SpaceCamera = {
 	target: [10, 20, 0],
@@ -21,6 +21,22 @@ describe('the camera in space', () => {
 		const [x, y] = project(camera, [10, 20, 0])!;
 		expect(x).toBeCloseTo(450, 9);
 		expect(y).toBeCloseTo(300, 9);
+	});
+
+	it.each([true, false])('fits points beside a card (parallel: %s)', (parallel) => {
+		const feet: Vec3[] = [
+			[-60, -20, 0],
+			[60, -20, 0],
+			[60, 20, 0],
+			[-60, 20, 0]
+		];
+		const fitted = fitBeside({ ...camera, parallel }, feet, 0.1, { leftPx: 20, rightPx: 320 });
+		expect(fitted.widthPx).toBe(900);
+		for (const foot of feet) {
+			const [x] = project(fitted, foot)!;
+			expect(x).toBeGreaterThan(20);
+			expect(x).toBeLessThan(580);
+		}
 	});
 
 	it('looks north with east to the right and up above', () => {

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { BoundaryPart } from '$lib/core';
-import { fitBox, panBy, toGround, toScreen, zoomAt, type PlanCamera } from './plan-camera';
+import { fitBox, frameBox, panBy, toGround, toScreen, zoomAt, type PlanCamera } from './plan-camera';
 import { setBackLine } from './set-back-line';
 
 const camera: PlanCamera = { eastM: 10, northM: 20, pxPerM: 4, widthPx: 800, heightPx: 600 };
@@ -22,6 +22,19 @@ describe('the plan camera', () => {
 	it('moves the ground with the pointer', () => {
 		const moved = panBy(camera, 40, -20);
 		expect(toScreen(moved, [10, 20])).toEqual([440, 280]);
+	});
+
+	it('frames a pair near enough to be read, and a wide group whole', () => {
+		const margins = { left: 100, right: 200, top: 60, bottom: 30 };
+		const pair = { westM: 0, eastM: 7, southM: 0, northM: 0 };
+		expect(frameBox({ ...camera, pxPerM: 2 }, pair, margins).pxPerM).toBeCloseTo(12, 9);
+		// Whoever looks from nearer stays as near as the room allows.
+		expect(frameBox({ ...camera, pxPerM: 15 }, pair, margins).pxPerM).toBeCloseTo(15, 9);
+		const wide = { westM: 0, eastM: 200, southM: 0, northM: 40 };
+		const framed = frameBox(camera, wide, margins);
+		expect(toScreen(framed, [0, 0])[0]).toBeGreaterThan(100);
+		expect(toScreen(framed, [200, 0])[0]).toBeLessThan(600);
+		expect(toScreen(framed, [100, 20])[0]).toBeCloseTo(350, 6);
 	});
 
 	it('shows a box whole and inside the margins', () => {
