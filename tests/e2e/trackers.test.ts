@@ -103,17 +103,16 @@ test('dragging moves a tracker in one undo step; Escape gives a drag up', async 
 
 test('a tracker too near to another is placed, and the finding says so and leads there', async ({ page }) => {
 	await openPlan(page);
-	await expect(page.locator('[data-figure="findings"]')).toHaveText('no findings');
+	await expect(page.locator('[data-figure="findings"]')).toHaveText('no layout findings');
 	await clickTracker(page, 'B02');
 	const east = inspector(page).getByLabel('East');
 	await east.fill('4');
 	await east.press('Enter');
 	await expect(inspector(page)).toContainText('reach circles overlap');
-	await expect(page.locator('[data-figure="findings"]')).toHaveText('1 finding');
-	await page.keyboard.press('Escape');
-	await page.keyboard.press('Escape');
-	await expect(inspector(page)).toHaveCount(0);
+	await expect(page.locator('[data-figure="findings"]')).toHaveText('1 layout finding');
+	// The list opens over the card of what is selected.
 	await page.locator('[data-figure="findings"]').click();
+	await expect(inspector(page)).toHaveCount(0);
 	await page.getByRole('button', { name: /B01 and B02: reach circles overlap/ }).click();
 	await expect(page.getByRole('heading', { name: '2 trackers' })).toBeVisible();
 });
@@ -165,7 +164,7 @@ test('the plot is filled as the card foretells, and undo brings back what stood'
 	expect(Number(foretold)).toBeGreaterThan(6);
 	await card.getByRole('button', { name: `Place ${foretold} trackers` }).click();
 	await expect(count(page)).toContainText(`${foretold} trackers`);
-	await expect(page.locator('[data-figure="findings"]')).toHaveText('no findings');
+	await expect(page.locator('[data-figure="findings"]')).toHaveText('no layout findings');
 	await expect
 		.poll(async () => (await storedLayout(page, field.layoutId)).trackers.length)
 		.toBe(Number(foretold));
@@ -262,8 +261,9 @@ for (const [choice, expected] of [
 		const east = inspector(page).getByLabel('East');
 		await east.fill('5');
 		await east.press('Enter');
-		const dialog = page.getByRole('dialog', { name: 'Changed by somebody else meanwhile' });
-		await expect(dialog).toContainText('It has 1 tracker (A01) at another place.');
+		const dialog = page.getByRole('dialog', { name: 'Changed in another window meanwhile' });
+		await expect(dialog).toContainText(/Places differ: A01 by 8.0\sm/);
+		await expect(dialog.getByRole('button', { name: 'Keep both' })).toHaveCount(0);
 		await dialog.getByRole('button', { name: choice }).click();
 		await expect(dialog).toBeHidden();
 		await expect.poll(() => eastOf(page, field, 'A01')).toBe(expected);
@@ -271,6 +271,69 @@ for (const [choice, expected] of [
 		await expect(east).toHaveValue(expected.toFixed(2));
 	});
 }
+
+test('what each side moved goes on when both moved different trackers', async ({ page }) => {
+	const field = await openPlan(page);
+	await moveFirstTracker(page, field.layoutId);
+	await clickTracker(page, 'B02');
+	const east = inspector(page).getByLabel('East');
+	await east.fill('14');
+	await east.press('Enter');
+	const dialog = page.getByRole('dialog', { name: 'Changed in another window meanwhile' });
+	await expect(dialog).toContainText('saved by you in another window at');
+	await dialog.getByRole('button', { name: 'Keep both' }).click();
+	await expect(dialog).toBeHidden();
+	await expect.poll(() => eastOf(page, field, 'B02')).toBe(14);
+	expect(await eastOf(page, field, 'A01')).toBe(-3);
+	await expect(saveState(page)).toContainText('Saved');
+});
+
+test('a window that lay aside takes over what was saved elsewhere', async ({ page }) => {
+	const field = await openPlan(page);
+	await moveFirstTracker(page, field.layoutId);
+	await page.evaluate(() => window.dispatchEvent(new Event('focus')));
+	await expect(
+		page.getByText(/A newer version, saved by you in another window at .*, is shown now/)
+	).toBeVisible();
+	await clickTracker(page, 'A01');
+	await expect(inspector(page).getByLabel('East')).toHaveValue('-3.00');
+});
+
+test('a fill that can’t stand is refused, and its field is gone to', async ({ page }) => {
+	await openPlan(page);
+	await page.getByRole('button', { name: 'Fill', exact: true }).click();
+	const card = page.locator('[data-fill]');
+	const pitch = card.getByLabel('Pitch E–W');
+	for (const [typed, reason] of [
+		['abc', 'not a number'],
+		['2', 'Reach circles would overlap: give 7.57 m or more.']
+	]) {
+		await pitch.fill(typed);
+		await card.getByLabel('Turn').focus();
+		await expect(card.getByRole('alert')).toContainText(reason);
+		await expect(card.locator('[data-figure="fill-count"]')).toHaveText('–');
+		await card.getByRole('button', { name: 'Correct the marked field' }).click();
+		await expect(pitch).toBeFocused();
+	}
+	await pitch.fill('14');
+	await pitch.press('Enter');
+	await expect(card.getByRole('button', { name: /^Place \d+ trackers/ })).toBeVisible();
+	await expect(count(page)).toContainText('6 trackers');
+});
+
+test('a low corner is raised from the findings in one step', async ({ page }) => {
+	await openPlan(page);
+	await clickTracker(page, 'B01');
+	const axis = inspector(page).getByLabel('Axis height');
+	await axis.fill('2.3');
+	await axis.press('Enter');
+	await page.locator('[data-figure="findings"]').click();
+	await page.getByRole('button', { name: 'Raise it to 2.50 m' }).click();
+	await expect(page.locator('[data-figure="findings"]')).toHaveText('no layout findings');
+	await page.getByRole('button', { name: 'Undo: Raise 1 tracker to 2.50 m' }).click();
+	await expect(page.locator('[data-figure="findings"]')).toHaveText('1 layout finding');
+	await expect(page.getByText('Undone: Raise 1 tracker to 2.50 m.')).toBeAttached();
+});
 
 test('the 3D view and the look from the sun open on the same layout', async ({ page }) => {
 	await openPlan(page);
