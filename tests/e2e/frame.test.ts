@@ -177,7 +177,7 @@ test('an owner invites a crew member, who joins by the letter and sees only that
 	await other.getByRole('article').filter({ hasText: email }).getByRole('link').first().click();
 	await expect(other.getByRole('heading', { name: 'Join Meadow for the crew' })).toBeVisible();
 	await other.getByRole('button', { name: 'Join as crew' }).click();
-	await expect(other).toHaveURL(/\/projects\/[^/]+\/plan/);
+	await expect(other).toHaveURL(/\/projects\/[^/]+\/site/);
 	await other.goto('/projects');
 	await expect(other.getByText('Meadow for the crew')).toBeVisible();
 	await expect(other.getByText('Meadow kept back')).toHaveCount(0);
