@@ -62,7 +62,7 @@ test.describe('the shade page', () => {
 
 	test('follows a run over a reload and cancels it', async ({ page }) => {
 		await signIn(page, 'designer@tiltyard.test');
-		const { projectId } = await makeSmallField(page, { rows: 8, columns: 60 });
+		const { projectId } = await makeSmallField(page, { rows: 8, columns: 150 });
 		await page.goto(`/projects/${projectId}/shade`);
 		await page.getByLabel('Time step').selectOption('5');
 		await page.getByRole('button', { name: 'Compute the year' }).click();
