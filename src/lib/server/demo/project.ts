@@ -75,9 +75,12 @@ async function fillProject(designer: Actor, people: DemoPeople): Promise<void> {
 	await issuePlan(designer, projectId, { layoutId, reason: 'First issue, for pegging out (invented demo)' });
 }
 
-/** The common mount and the exceptions that the run proposes. */
+/** The common mount, and those exceptions of the run that better a tracker's class. */
 async function chooseMounts(actor: Actor, runId: string): Promise<MountChoice> {
 	const result = await getMountResult(actor, runId);
-	const exceptions = Object.fromEntries(result.exceptions.map((one) => [one.trackerId, one.mount]));
+	const commonClass = new Map(result.trackers.map((one) => [one.trackerId, one.commonClass]));
+	// A place of its own only where it wins a class: every further place is one more drawing for the crew.
+	const worthIt = result.exceptions.filter((one) => one.class !== commonClass.get(one.trackerId));
+	const exceptions = Object.fromEntries(worthIt.map((one) => [one.trackerId, one.mount]));
 	return { common: result.common, exceptions, fromRunId: runId };
 }
