@@ -2,7 +2,7 @@ import { RADIANS_PER_DEGREE, tableAxes } from '../conventions';
 import { hullOrder } from './hull';
 import { LitPieces, flatArea } from './pieces';
 import { RectUnion } from './rect-union';
-import type { Solid } from './solid';
+import { passesOn, type Solid } from './solid';
 import { ViewGrid } from './view-grid';
 
 /** Tables that share sizes and, at any one moment, their pose. */
@@ -23,6 +23,12 @@ export interface AimedPose {
 	azimuthDeg: number;
 	tiltDeg: number;
 	offset: readonly [number, number, number];
+}
+
+/** Ground near the tables, rising between them and the light. */
+export interface TableHorizons {
+	/** Whether it hides light from this direction from the middle of table i. Degrees. */
+	hides(i: number, azimuthDeg: number, elevationDeg: number): boolean;
 }
 
 /** A table counts as turned away from the sun below this cosine. */
@@ -99,6 +105,12 @@ export class ShadeEngine {
 	private axisX: [number, number, number] = [1, 0, 0];
 	private axisY: [number, number, number] = [0, 1, 0];
 
+	private lightAzimuthDeg = 0;
+	private lightElevationDeg = 90;
+	/** Share of the light that each solid lets through on the present day. */
+	private readonly solidPasses: Float64Array;
+	private seasonal = false;
+
 	constructor(
 		/** Fixed points of the tables, metres. */
 		readonly east: Float64Array,
@@ -107,7 +119,9 @@ export class ShadeEngine {
 		/** Group of each table. */
 		readonly groupOf: Int32Array,
 		readonly groups: readonly TableGroup[],
-		solids: readonly Solid[]
+		solids: readonly Solid[],
+		/** Near ground that hides the light from single tables; null where there is none. */
+		readonly horizons: TableHorizons | null = null
 	) {
 		this.count = east.length;
 		this.poses = groups.map(() => new GroupPose());
@@ -118,6 +132,14 @@ export class ShadeEngine {
 		this.solidBoxes = new Float64Array(4 * solids.length);
 		this.outlines = solids.map(() => null);
 		this.nearSolids = new Int32Array(solids.length);
+		this.solidPasses = Float64Array.from(this.solids, (solid) => solid.passes);
+		this.seasonal = this.solids.some((solid) => solid.leafPasses !== undefined);
+	}
+
+	/** Turns to a day of the year, 1..366: trees stand in leaf or bare. Bare until it is called. */
+	setDay(dayOfYear: number): void {
+		if (!this.seasonal) return;
+		this.solids.forEach((solid, k) => (this.solidPasses[k] = passesOn(solid, dayOfYear)));
 	}
 
 	/**
@@ -125,8 +147,21 @@ export class ShadeEngine {
 	 * when only a few tables are asked about.
 	 */
 	setSun(azimuthDeg: number, elevationDeg: number, indexed = true): void {
-		const a = azimuthDeg * RADIANS_PER_DEGREE;
-		const e = elevationDeg * RADIANS_PER_DEGREE;
+		this.setLight(azimuthDeg, elevationDeg, azimuthDeg, elevationDeg, indexed);
+	}
+
+	/** Tables stand as for a sun while the light comes from elsewhere: a piece of the sky. Degrees. */
+	setLight(
+		azimuthDeg: number,
+		elevationDeg: number,
+		lightAzimuthDeg: number,
+		lightElevationDeg: number,
+		indexed = true
+	): void {
+		this.lightAzimuthDeg = lightAzimuthDeg;
+		this.lightElevationDeg = lightElevationDeg;
+		const a = lightAzimuthDeg * RADIANS_PER_DEGREE;
+		const e = lightElevationDeg * RADIANS_PER_DEGREE;
 		const sa = Math.sin(a);
 		const ca = Math.cos(a);
 		const se = Math.sin(e);
@@ -315,15 +350,50 @@ export class ShadeEngine {
 
 	/** Shaded share of table i, 0..1; 1 when its front is not lit. */
 	share(i: number): number {
-		if (this.cosine(i) <= LEAST_COSINE) return 1;
+		if (this.cosine(i) <= LEAST_COSINE || this.hidden(i)) return 1;
 		return this.collect(i) === 0 ? 0 : this.shareOfCollected(i);
+	}
+
+	/** Shaded shares of tables `from` to `to` (not itself) into `out` at their own places; how many are above 0. */
+	shares(out: Float64Array, from = 0, to = this.count): number {
+		let shaded = 0;
+		for (let i = from; i < to; i++) {
+			out[i] = this.share(i);
+			if (out[i] > 0) shaded++;
+		}
+		return shaded;
+	}
+
+	/** Whether near ground hides the light from table i. */
+	private hidden(i: number): boolean {
+		return this.horizons !== null && this.horizons.hides(i, this.lightAzimuthDeg, this.lightElevationDeg);
+	}
+
+	/**
+	 * Shaded share of table i, from what `collect` found for it, if one thing were not there: table `without`, or the
+	 * obstacle -1 - source.
+	 */
+	shareWithout(i: number, without: number): number {
+		const { near, nearCount, nearSolids, nearSolidCount } = this;
+		const tables = near.slice(0, nearCount);
+		const solids = nearSolids.slice(0, nearSolidCount);
+		this.nearCount = 0;
+		for (const j of tables) if (j !== without) near[this.nearCount++] = j;
+		this.nearSolidCount = 0;
+		for (const k of solids) if (-1 - this.solids[k].source !== without) nearSolids[this.nearSolidCount++] = k;
+		const share = this.shareOfCollected(i);
+		near.set(tables);
+		nearSolids.set(solids);
+		this.nearCount = nearCount;
+		this.nearSolidCount = nearSolidCount;
+		return share;
 	}
 
 	/** Shaded share from what `collect` found for the same table. */
 	shareOfCollected(i: number): number {
 		const g = this.groupOf[i];
 		const pose = this.poses[g];
-		if (pose.cosine <= LEAST_COSINE) return 1;
+		if (pose.cosine <= LEAST_COSINE || this.hidden(i)) return 1;
 		if (this.nearCount + this.nearSolidCount === 0) return 0;
 		const group = this.groups[g];
 		const area = 4 * (group.halfWidth - group.halfGap) * group.halfHeight;
@@ -340,7 +410,7 @@ export class ShadeEngine {
 
 	/** Flat polygons of the lit pieces of table i in table coordinates, metres. */
 	litPolygons(i: number, leastLight: number): number[][] {
-		if (this.cosine(i) <= LEAST_COSINE) return [];
+		if (this.cosine(i) <= LEAST_COSINE || this.hidden(i)) return [];
 		this.collect(i);
 		this.cutPieces(i);
 		return this.pieces.polygons(leastLight);
@@ -401,7 +471,7 @@ export class ShadeEngine {
 		}
 		for (let k = 0; k < this.nearSolidCount && pieces.count > 0; k++) {
 			const m = this.solidShadow(i, this.nearSolids[k], 0);
-			if (m > 0) pieces.subtract(shadow, m, this.solids[this.nearSolids[k]].passes);
+			if (m > 0) pieces.subtract(shadow, m, this.solidPasses[this.nearSolids[k]]);
 		}
 	}
 
@@ -429,7 +499,7 @@ export class ShadeEngine {
 		for (let k = 0; k < this.nearSolidCount; k++) {
 			const solid = this.solids[this.nearSolids[k]];
 			const m = this.solidShadow(i, this.nearSolids[k], forwardM);
-			if (m > 0) visit(this.shadow, m, solid.passes, -1 - solid.source);
+			if (m > 0) visit(this.shadow, m, this.solidPasses[this.nearSolids[k]], -1 - solid.source);
 		}
 	}
 

@@ -9,10 +9,22 @@ export interface Solid {
 	edges: Int32Array;
 	/** Outward faces (nx, ny, nz, d): inside where n.p <= d. */
 	faces: Float64Array;
-	/** Share of the beam that passes, 0 opaque. */
+	/** Share of the beam that passes, 0 opaque; of a tree, bare. */
 	passes: number;
+	/** The same in leaf, on the days of the year `leafDays` (first and last, 1..366; may run over the year's end). */
+	leafPasses?: number;
+	leafDays?: readonly [from: number, to: number];
 	/** The obstacle it is part of, for naming who shades. */
 	source: number;
+}
+
+/** Share of the beam that a solid lets through on a day of the year, 1..366. */
+export function passesOn(solid: Solid, dayOfYear: number): number {
+	const { passes, leafPasses, leafDays } = solid;
+	if (leafPasses === undefined || leafDays === undefined) return passes;
+	const [from, to] = leafDays;
+	const inLeaf = from <= to ? dayOfYear >= from && dayOfYear <= to : dayOfYear >= from || dayOfYear <= to;
+	return inLeaf ? leafPasses : passes;
 }
 
 /** Sides of a trunk or crown; corner k stands at azimuth 360 k / sides. */
