@@ -125,7 +125,10 @@ export interface TrackerModel {
 	night: { azimuthDeg: number | null; tiltDeg: number };
 	/** Tilt in high wind. */
 	windTiltDeg: number;
+	/** Speed of turning about the upright axis, and of tilting unless that has its own. */
 	slewDegPerS: number;
+	/** Speed of tilting, degrees a second; left out, it is `slewDegPerS`. */
+	tiltSlewDegPerS?: number;
 	sensorHeadRadiusM: number;
 	/** Half-angle of the sensor's view off its axis. */
 	sensorViewDeg: number;
@@ -133,6 +136,12 @@ export interface TrackerModel {
 	sensorLeadM: number;
 	moduleColumns: number;
 	moduleRows: number;
+	/** Long side of a module up the slope (portrait) or level (landscape); left out, it follows from the grid's shape. */
+	moduleOrientation?: 'portrait' | 'landscape';
+	/** Cell groups of a module with a bypass of their own, strips along its long side; left out, 3. */
+	groupsPerModule?: number;
+	/** Modules in series in one string, filled row by row from the bottom left; left out, the whole table. */
+	modulesPerString?: number;
 	/** Table power. */
 	powerW: number;
 }

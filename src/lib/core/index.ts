@@ -10,6 +10,7 @@ export * from './geometry/skyline';
 export * from './machine/aim';
 export * from './machine/pose';
 export * from './machine/reach';
+export * from './machine/modules';
 export * from './layout/polygon';
 export * from './layout/rows';
 export * from './layout/tags';

@@ -25,11 +25,17 @@ export const trackerModelShape = {
 	night: z.strictObject({ azimuthDeg: bearing.nullable(), tiltDeg: quantity(0, 90, 'degrees') }),
 	windTiltDeg: quantity(0, 90, 'degrees'),
 	slewDegPerS: quantity(0.005, 20, 'degrees a second'),
+	tiltSlewDegPerS: quantity(0.005, 20, 'degrees a second').optional(),
 	sensorHeadRadiusM: quantity(0.001, 0.5, 'm'),
 	sensorViewDeg: quantity(1, 90, 'degrees'),
 	sensorLeadM: quantity(0, 200, 'm'),
 	moduleColumns: wholeNumber(1, 100),
 	moduleRows: wholeNumber(1, 100),
+	moduleOrientation: z
+		.enum(['portrait', 'landscape'], { error: 'Give the modules as "portrait" or "landscape".' })
+		.optional(),
+	groupsPerModule: wholeNumber(1, 12).optional(),
+	modulesPerString: wholeNumber(1, 10_000).optional(),
 	powerW: quantity(0, 200_000, 'W')
 };
 
@@ -48,6 +54,10 @@ export function checkModel(
 	}
 	if (model.night.tiltDeg > model.maxTiltDeg) {
 		add(['night', 'tiltDeg'], 'The night tilt lies beyond the largest tilt.');
+	}
+	const modules = model.moduleColumns * model.moduleRows;
+	if (model.modulesPerString !== undefined && model.modulesPerString > modules) {
+		add(['modulesPerString'], `The table has ${modules} modules: a string of it can’t hold more.`);
 	}
 	if (model.windTiltDeg > model.maxTiltDeg)
 		add(['windTiltDeg'], 'The wind tilt lies beyond the largest tilt.');

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { modelLibrary, newTrackerModelSchema } from '$lib/schema';
+import { z } from 'zod';
+import { modelLibrary, newTrackerModelSchema, trackerModelShape } from '$lib/schema';
 import { groups } from './model-fields';
 
 const { id: _id, ...model } = modelLibrary[1];
@@ -10,7 +11,18 @@ describe('the form of a tracker model', () => {
 		const numbers = Object.entries(model)
 			.filter(([key, value]) => typeof value === 'number' && key !== 'windTiltDeg')
 			.map(([key]) => key);
-		expect(fields.map((field) => field.key).sort()).toEqual(numbers.sort());
+		const asked = fields.filter((field) => !field.optional).map((field) => field.key);
+		expect(asked.sort()).toEqual(numbers.sort());
+	});
+
+	it('lets exactly those numbers stand empty that the schema lets out', () => {
+		const leftOut = Object.entries(trackerModelShape)
+			.filter(([, shape]) => shape instanceof z.ZodOptional && shape.unwrap() instanceof z.ZodNumber)
+			.map(([key]) => key);
+		expect(fields.filter((field) => field.optional).map((field) => field.key)).toEqual(
+			expect.arrayContaining(leftOut)
+		);
+		expect(leftOut.length).toBe(fields.filter((field) => field.optional).length);
 	});
 
 	it.each(fields)('shows the range that the schema holds for $label', ({ key, min, max }) => {

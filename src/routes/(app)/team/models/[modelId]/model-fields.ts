@@ -1,8 +1,8 @@
 import type { TrackerModel } from '$lib/core';
 
-/** Fields of a model that are one number each. */
+/** Fields of a model that are one number each, always there or optional. */
 export type ModelNumber = {
-	[Key in keyof TrackerModel]: TrackerModel[Key] extends number ? Key : never;
+	[Key in keyof Required<TrackerModel>]: Required<TrackerModel>[Key] extends number ? Key : never;
 }[keyof TrackerModel];
 
 interface ModelField {
@@ -13,6 +13,8 @@ interface ModelField {
 	max: number;
 	step: number;
 	hint?: string;
+	/** May be left empty. */
+	optional?: boolean;
 }
 
 /** The form of a tracker model; ranges as in its schema, which has the last word. */
@@ -67,6 +69,32 @@ export const groups: { title: string; note: string; fields: ModelField[] }[] = [
 				max: 200_000,
 				step: 100,
 				hint: 'Of the whole table; kW may be typed.'
+			}
+		]
+	},
+	{
+		title: 'Modules',
+		note: 'how the cells are grouped, for the loss by shade',
+		fields: [
+			{
+				key: 'groupsPerModule',
+				label: 'Protected groups in a module',
+				unit: '',
+				min: 1,
+				max: 12,
+				step: 1,
+				optional: true,
+				hint: 'Cell groups with a bypass of their own; empty is 3.'
+			},
+			{
+				key: 'modulesPerString',
+				label: 'Modules in a string',
+				unit: '',
+				min: 1,
+				max: 10_000,
+				step: 1,
+				optional: true,
+				hint: 'In series; empty is the whole table.'
 			}
 		]
 	},
@@ -134,7 +162,17 @@ export const groups: { title: string; note: string; fields: ModelField[] }[] = [
 				step: 1,
 				hint: '90 stands upright.'
 			},
-			{ key: 'slewDegPerS', label: 'Speed', unit: '°/s', min: 0.005, max: 20, step: 0.05 }
+			{ key: 'slewDegPerS', label: 'Speed', unit: '°/s', min: 0.005, max: 20, step: 0.05 },
+			{
+				key: 'tiltSlewDegPerS',
+				label: 'Speed of tilting',
+				unit: '°/s',
+				min: 0.005,
+				max: 20,
+				step: 0.05,
+				optional: true,
+				hint: 'Empty when it tilts as fast as it turns.'
+			}
 		]
 	},
 	{
@@ -154,4 +192,16 @@ export const groups: { title: string; note: string; fields: ModelField[] }[] = [
 			{ key: 'sensorLeadM', label: 'Length of its lead', unit: 'm', min: 0, max: 200, step: 0.5 }
 		]
 	}
+];
+
+/** Numbers that a model may leave out. */
+type OptionalNumber = 'tiltSlewDegPerS' | 'groupsPerModule' | 'modulesPerString';
+
+export const isOptional = (key: ModelNumber): key is OptionalNumber =>
+	key === 'tiltSlewDegPerS' || key === 'groupsPerModule' || key === 'modulesPerString';
+
+export const moduleOrientations = [
+	{ value: '', label: 'as their shape says' },
+	{ value: 'landscape', label: 'long side level (landscape)' },
+	{ value: 'portrait', label: 'long side up the slope (portrait)' }
 ];
