@@ -39,7 +39,10 @@ await build({
 		emptyOutDir: true,
 		target: 'node20',
 		minify: false,
-		lib: { entry: { run: `${root}tests/bench/run.ts` }, formats: ['es'] },
+		lib: {
+			entry: { run: `${root}tests/bench/run.ts`, child: `${root}tests/bench/child.ts` },
+			formats: ['es']
+		},
 		rolldownOptions: {
 			external: [/^node:/, 'three', 'three-mesh-bvh', 'polyclip-ts'],
 			output: { entryFileNames: '[name].mjs', chunkFileNames: '[name].mjs' }
@@ -94,6 +97,7 @@ const figures = await measure({
 	quick: options.quick,
 	only: options.only,
 	folder: bundleDir,
+	sources: `${root}tests/bench`,
 	say: (/** @type {string} */ line) => console.log(line),
 	figure: (/** @type {string} */ name, /** @type {number} */ value, /** @type {string} */ note) => {
 		const effect = name.slice(0, name.indexOf('.'));

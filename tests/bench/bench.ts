@@ -8,6 +8,8 @@ export interface BenchOptions {
 	only: string;
 	/** Where scratch files and the bundled workers stand. */
 	folder: string;
+	/** tests/bench itself, for the C++ sources. */
+	sources: string;
 	/** Hears each figure as it comes, and lines that say what was left out. */
 	say: (line: string) => void;
 	figure: (name: string, value: number, note: string) => void;
