@@ -18,6 +18,161 @@ export interface RunInput {
 	utcOffsetMinutes: number;
 	/** Years that the trees have grown since the plot was recorded. */
 	treeYears: number;
+	/** What the year's energy is computed from; left out, the run answers the shade alone. */
+	energy?: EnergySettings;
+}
+
+/** Where the light of an energy year comes from. */
+export type EnergySky =
+	| {
+			/** A year without a cloud: Ineichen and Perez 2002. */
+			source: 'clear';
+			/** Linke turbidity by month, January first; left out, the rule of `defaultLinkeTurbidity`. */
+			linkeTurbidity?: number[];
+	  }
+	| {
+			/** An average year from monthly sums of global horizontal irradiation, kWh/m², January first. */
+			source: 'average';
+			monthlyHorizontalKwhM2: number[];
+	  }
+	| {
+			/** The hours of a weather file. */
+			source: 'weather';
+			name: string;
+			/** Where the file was made for; degrees, metres. */
+			latitudeDeg: number;
+			longitudeDeg: number;
+			altitudeM: number;
+			/** Of the file's local standard time, east positive. */
+			utcOffsetHours: number;
+			/** Runs of hours without a gap: beginning of the first one, UTC, and how many follow. */
+			spans: { startMs: number; hours: number }[];
+			/** Means over each hour, W/m², in the order of the spans; null where the file has none. */
+			ghi: (number | null)[];
+			dni: (number | null)[];
+			dhi: (number | null)[];
+	  };
+
+export type EnergySkyModel = 'hay-davies' | 'perez' | 'isotropic';
+
+export interface EnergySettings {
+	sky: EnergySky;
+	/** How the sky's diffuse light reaches a tilted table. */
+	skyModel: EnergySkyModel;
+	/** Share of light that the ground sends back, 0..1: one number or twelve, January first. */
+	albedo: number | number[];
+}
+
+/** Light on a table by where it comes from, kWh/m² of glass. */
+export interface EnergyParts {
+	beam: number;
+	/** Sky light from about the sun: shaded as the beam is. */
+	circumsolar: number;
+	/** Evenly from the sky that the table sees. */
+	isotropic: number;
+	/** Of the bright (or dark) band at the horizon; may be below 0. */
+	horizon: number;
+	/** Sent back by the ground. */
+	ground: number;
+	total: number;
+}
+
+/** Never one number where a range is meant. */
+export interface EnergyRange {
+	low: number;
+	likely: number;
+	high: number;
+}
+
+/** Losses as shares of all the light that would come without neighbours and obstacles, 0..1; they add up. */
+export interface EnergyLosses {
+	/** Beam that is shaded, by area. */
+	beam: number;
+	/** Sky light taken: circumsolar with the beam, the rest by the sky that is covered. */
+	sky: number;
+	/** What partly shaded strings lose beyond the shaded area: from nothing to the worst wiring. */
+	electrical: EnergyRange;
+	/** All three. */
+	total: EnergyRange;
+}
+
+/** The same three losses by month or by hour of standard time; null while there is no light. */
+export interface EnergyLossSeries {
+	beam: (number | null)[];
+	sky: (number | null)[];
+	/** Likely. */
+	electrical: (number | null)[];
+}
+
+export interface TrackerEnergy {
+	trackerId: string;
+	tag: string;
+	without: EnergyParts;
+	with: EnergyParts;
+	losses: EnergyLosses;
+	/** Twelve. */
+	months: EnergyLossSeries;
+	/** Twenty-four. */
+	hours: EnergyLossSeries;
+}
+
+/** One reason why the year could be otherwise, in words. Points are hundredths of the light without shade. */
+export interface EnergyReason {
+	id: 'strings' | 'sky-model' | 'weather' | 'heights' | 'ground' | 'sky-view' | 'steps' | 'place';
+	words: string;
+	/** How far it could lower or raise what the field receives, points; null where it is not known. */
+	lessPoints: number | null;
+	morePoints: number | null;
+}
+
+export interface EnergyResult {
+	model: {
+		sky: string;
+		skyModel: string;
+		ground: string;
+		skyView: string;
+		strings: string;
+		steps: number;
+		/** As computed: it divides the hour or the day that the source is made of. */
+		stepMinutes: number;
+		/** Linke turbidity that was used; null when the source needs none. */
+		linkeTurbidity: number[] | null;
+	};
+	/** Of the sky, before any table, kWh/m²: the year and its months. */
+	horizontal: {
+		globalKwhM2: number;
+		diffuseKwhM2: number;
+		directNormalKwhM2: number;
+		monthlyGlobalKwhM2: number[];
+		/** Given but in no step, because the sun stays down. */
+		unplacedKwhM2: number;
+	};
+	/** Of a weather file: global less diffuse and direct x cos z with the sun of mid-hour, W/m². */
+	closure: { meanWm2: number; rmsWm2: number; maxWm2: number; hours: number } | null;
+	/** Hours of a weather file that lack a value and count as dark. */
+	missingHours: number;
+	field: {
+		/** Means over the field's glass. */
+		without: EnergyParts;
+		with: EnergyParts;
+		losses: EnergyLosses;
+		months: EnergyLossSeries;
+		hours: EnergyLossSeries;
+		/** Light without shade by month, kWh/m². */
+		monthlyWithoutKwhM2: number[];
+		/**
+		 * Light after all losses over 1 kW/m², hours: the reference yield of IEC 61724-1. It holds no losses of modules,
+		 * cables and inverters.
+		 */
+		referenceYieldH: EnergyRange;
+		/** Rated power of all tables, kW. */
+		ratedKw: number;
+		/** The other sky model on the same field. */
+		otherModel: { skyModel: EnergySkyModel; withoutKwhM2: number; withKwhM2: number; totalLoss: number };
+		worstTrackerId: string | null;
+	};
+	trackers: TrackerEnergy[];
+	reasons: EnergyReason[];
 }
 
 export interface TrackerShade {
@@ -57,6 +212,8 @@ export interface ShadeResult {
 	trackers: TrackerShade[];
 	shortestDay: DayShade;
 	winterRule: WinterVerdict;
+	/** The year's energy, when it was asked for. */
+	energy?: EnergyResult | null;
 }
 
 export interface DayShade {

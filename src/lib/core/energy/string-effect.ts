@@ -27,6 +27,11 @@ export function stringEffect({ geometricShare, shadedBlocks, blocks }: BlockShad
 	if (!(blocks >= 1) || !(shadedBlocks >= 0 && shadedBlocks <= blocks)) {
 		throw new RangeError(`String effect: ${shadedBlocks} shaded blocks of ${blocks}`);
 	}
-	const formula = 1 - (1 - geometricShare) * (1 - shadedBlocks / (blocks + 1));
-	return { loss: Math.min(1, Math.max(geometricShare, formula)), least: geometricShare, most: 1 };
+	return { loss: stringLoss(geometricShare, shadedBlocks, blocks), least: geometricShare, most: 1 };
+}
+
+/** The loss of `stringEffect` alone, for runs that ask millions of times; nothing is checked. */
+export function stringLoss(geometricShare: number, shadedBlocks: number, blocks: number): number {
+	const formula = 1 - (1 - geometricShare) * (1 - shadedBlocks / (blocks + 1)); // eq. 6
+	return Math.min(1, Math.max(geometricShare, formula));
 }
