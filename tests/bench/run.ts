@@ -2,18 +2,26 @@ import { Bench, type BenchOptions, type Figures } from './bench';
 import { memoryFigures } from './memory';
 import { otherFigures } from './others';
 import { layoutFigures, mountFigures, previewFigures, yearFigures } from './runs';
-import { shareFigures, sunFigures } from './shares';
+import { listFigures, shareFigures, sunFigures } from './shares';
+
+/** Beginnings of the names that each part gives, so that nothing is prepared that nobody asked for. */
+const PARTS: [effects: string[], part: (bench: Bench) => void | Promise<void>][] = [
+	[['sun.'], sunFigures],
+	[['lists.', 'listsUnlike.'], listFigures],
+	[['alike.', 'unlike.'], shareFigures],
+	[['year.', 'yearUnlike.'], yearFigures],
+	[['moved.', 'day.', 'dayUnlike.'], previewFigures],
+	[['mounts.', 'mountsUnlike.'], mountFigures],
+	[['fill.', 'checks.'], layoutFigures],
+	[['memory.'], memoryFigures],
+	[['raysMesh', 'raysEmbree', 'unionPolygons.'], otherFigures]
+];
 
 /** Runs everything that is asked for. */
 export async function measure(options: BenchOptions): Promise<Figures> {
 	const bench = new Bench(options);
-	sunFigures(bench);
-	shareFigures(bench);
-	yearFigures(bench);
-	previewFigures(bench);
-	mountFigures(bench);
-	layoutFigures(bench);
-	await memoryFigures(bench);
-	await otherFigures(bench);
+	for (const [effects, part] of PARTS) {
+		if (effects.some((effect) => bench.wants(effect))) await part(bench);
+	}
 	return bench.figures;
 }

@@ -12,11 +12,11 @@ const UNLIKE_EVERY = { 10: 1, 100: 3, 1000: 19, 10000: 197 } as const;
 const QUICK_FEWER = 11;
 
 /** Shaded shares of all tables under all these suns: the rate once the field is prepared. */
-function sharesOf(bench: Bench, name: string, input: RunInput, every: number): void {
+function sharesOf(bench: Bench, name: string, input: () => RunInput, every: number): void {
 	if (!bench.wants(name)) return;
 	const k = bench.options.quick ? every * QUICK_FEWER : every;
 	const suns: SunDirection[] = everySun(k);
-	const { engine } = prepareField(input);
+	const { engine } = prepareField(input());
 	const shares = new Float64Array(engine.count);
 	bench.tableSuns(
 		name,
@@ -27,7 +27,7 @@ function sharesOf(bench: Bench, name: string, input: RunInput, every: number): v
 				engine.shares(shares);
 			}
 		},
-		k > 1 ? `every ${k}th sun` : '',
+		k > 1 ? `1 sun in ${k}` : '',
 		{ repeats: bench.options.quick ? 3 : 5 }
 	);
 }
@@ -38,27 +38,35 @@ export function sunFigures(bench: Bench): void {
 	});
 }
 
-export function shareFigures(bench: Bench): void {
-	const counts = bench.options.quick ? ([10, 100, 1000] as const) : COUNTS;
+/** The counts that this run takes. */
+const countsOf = (bench: Bench): readonly (typeof COUNTS)[number][] =>
+	bench.options.quick ? COUNTS.filter((count) => count <= 1000) : COUNTS;
+
+/** Preparing a field, everything included that stands before the first sun. */
+export function listFigures(bench: Bench): void {
 	for (const field of FIELDS) {
-		for (const count of counts) {
-			const name = `lists.${field}.${count}.ms`;
-			if (!bench.wants(name)) continue;
+		for (const count of countsOf(bench)) {
 			const input = alikeField(field, count);
-			bench.milliseconds(name, () => void prepareField(input), { budgetMs: 500 });
+			bench.milliseconds(`lists.${field}.${count}.ms`, () => void prepareField(input), { budgetMs: 500 });
+		}
+	}
+	const unlike = unlikeField('sloped', 1000);
+	bench.milliseconds('listsUnlike.sloped.1000.ms', () => void prepareField(unlike), { budgetMs: 500 });
+}
+
+export function shareFigures(bench: Bench): void {
+	for (const field of FIELDS) {
+		for (const count of countsOf(bench)) {
+			const name = `alike.${field}.${count}.tableSunsPerS`;
+			sharesOf(bench, name, () => alikeField(field, count), ALIKE_EVERY[count]);
 		}
 	}
 	for (const field of FIELDS) {
-		for (const count of counts) {
-			sharesOf(bench, `alike.${field}.${count}.tableSunsPerS`, alikeField(field, count), ALIKE_EVERY[count]);
-		}
-	}
-	for (const field of FIELDS) {
-		for (const count of counts) {
+		for (const count of countsOf(bench)) {
 			const name = `unlike.${field}.${count}.tableSunsPerS`;
-			sharesOf(bench, name, unlikeField(field, count), UNLIKE_EVERY[count]);
+			sharesOf(bench, name, () => unlikeField(field, count), UNLIKE_EVERY[count]);
 		}
 	}
 	const name = 'unlike.planted.1000.tableSunsPerS';
-	sharesOf(bench, name, planted(unlikeField('rough', 1000)), UNLIKE_EVERY[1000]);
+	sharesOf(bench, name, () => planted(unlikeField('rough', 1000)), UNLIKE_EVERY[1000]);
 }
