@@ -26,7 +26,10 @@ export interface BoundaryPart {
 	holes: PlanPoint[][];
 }
 
-/** Height of the ground relative to the origin's datum: level, or a plane through the origin. */
+/** A measured spot of the ground: [east, north, height] in metres. */
+export type GroundPoint = [eastM: number, northM: number, heightM: number];
+
+/** Height of the ground relative to the origin's datum: level, a plane through the origin, or measured. */
 export type Ground =
 	| { kind: 'level'; heightM: number }
 	| {
@@ -37,6 +40,24 @@ export type Ground =
 			risePercent: number;
 			/** Bearing towards which the ground rises. */
 			riseTowardsDeg: number;
+	  }
+	| {
+			/** Triangles between measured spots; beyond the outermost ones the height of the nearest edge is held. */
+			kind: 'points';
+			points: GroundPoint[];
+	  }
+	| {
+			/** Heights on a regular grid, straight between neighbours; beyond it the height of its edge is held. */
+			kind: 'raster';
+			/** Where the first height stands; the grid runs along true east and true north. */
+			westM: number;
+			southM: number;
+			/** Distance between neighbouring heights. */
+			cellM: number;
+			columns: number;
+			rows: number;
+			/** Row by row from the south, each from west to east; null is a gap, filled from its neighbours. */
+			heightsM: (number | null)[];
 	  };
 
 export interface SkylinePoint {
@@ -71,14 +92,75 @@ export interface TreeObstacle {
 	crownBaseM: number;
 	crownRadiusM: number;
 	trunkRadiusM: number;
-	/** Share of the beam that passes the crown, 0 opaque .. 1 clear. */
+	/** Share of the beam that passes the crown, 0 opaque .. 1 clear; of the bare crown where `leafTransmission` is given. */
 	crownTransmission: number;
 	growthMPerYear: number;
 	/** Height at which it stops growing. */
 	maxHeightM: number;
+	/** Left out, an upright cylinder. */
+	crownShape?: CrownShape;
+	/** Share of the beam that passes the crown in leaf; left out, the crown passes the same all year. */
+	leafTransmission?: number;
+	/** First and last day of the year in leaf, 1..366, over the year's end if it must; left out, by hemisphere. */
+	leafDays?: [from: number, to: number];
 }
 
-export type Obstacle = BoxObstacle | TreeObstacle;
+export type CrownShape = 'cylinder' | 'cone' | 'ellipsoid';
+
+/** A roof: flat at the height of the walls, or two planes that meet in a ridge through the middle of the footprint. */
+export type Roof =
+	| { kind: 'flat' }
+	| {
+			kind: 'pitched';
+			/** Ridge above the eaves. */
+			riseM: number;
+			/** Bearing that the ridge runs along. */
+			ridgeDeg: number;
+	  };
+
+export interface BuildingObstacle {
+	id: string;
+	kind: 'building';
+	name: string;
+	/** What the corners are measured from. */
+	eastM: number;
+	northM: number;
+	/** Footprint as offsets from (eastM, northM): an open ring, convex or not, either way round. */
+	corners: PlanPoint[];
+	/** Walls, to the eaves, above the ground under the middle of the footprint; they reach down to the lowest ground. */
+	heightM: number;
+	roof: Roof;
+}
+
+/** A wall, a fence or a hedge along a line; it follows the ground. */
+export interface WallObstacle {
+	id: string;
+	kind: 'wall';
+	name: string;
+	/** What the line's points are measured from. */
+	eastM: number;
+	northM: number;
+	/** Offsets from (eastM, northM), from end to end. */
+	line: PlanPoint[];
+	/** Above the ground under it. */
+	heightM: number;
+	thicknessM: number;
+	/** Share of the beam that passes it: 0 a wall, more for a fence or a hedge. */
+	transmission: number;
+}
+
+/** A mast, a chimney or a pole of an overhead line: upright and round. */
+export interface MastObstacle {
+	id: string;
+	kind: 'mast';
+	name: string;
+	eastM: number;
+	northM: number;
+	heightM: number;
+	radiusM: number;
+}
+
+export type Obstacle = BoxObstacle | TreeObstacle | BuildingObstacle | WallObstacle | MastObstacle;
 
 export interface Plot {
 	version: 1;

@@ -2,10 +2,11 @@ import type { SunDirection } from './conventions';
 import type { Layout, Place, Plot, Posture, TrackerModel } from './document';
 import { groundHeightM } from './geometry/ground';
 import { prepareSkyline, sunHidden, type PreparedSkyline } from './geometry/skyline';
+import { terrainHorizons, type TerrainHorizons } from './geometry/terrain-horizon';
 import { aimOf } from './machine/aim';
 import { centreOffset } from './machine/pose';
 import { ShadeEngine, type TableGroup } from './shade/engine';
-import { obstacleSolids } from './shade/solid';
+import { obstacleSolids } from './shade/obstacle-solids';
 
 /** A layout on its plot, ready to be asked for shade again and again. Make it once and reuse it between calls. */
 export interface Field {
@@ -17,6 +18,8 @@ export interface Field {
 	/** Model of each tracker, in layout order. */
 	readonly models: readonly TrackerModel[];
 	readonly engine: ShadeEngine;
+	/** Near skylines of measured ground by tracker; null on level and sloping planes. */
+	readonly horizons: TerrainHorizons | null;
 }
 
 export interface FieldInput {
@@ -53,7 +56,7 @@ const postureKey = (posture: Posture): string =>
 	posture.kind === 'standing' ? `standing ${posture.azimuthDeg} ${posture.tiltDeg}` : posture.kind;
 
 /**
- * Prepares a field. Trees and boxes stand on the ground under their middle. Throws only when a tracker names a model
+ * Prepares a field: feet and obstacles on the ground, near skylines where the ground was measured. Throws only when a tracker names a model
  * that the layout does not hold, which is a programmer's mistake: layouts are checked where they come in.
  */
 export function prepareField(input: FieldInput): Field {
@@ -86,9 +89,13 @@ export function prepareField(input: FieldInput): Field {
 		}
 		groupOf[i] = group;
 	});
-	const solids = plot.obstacles.flatMap((obstacle, k) =>
-		obstacleSolids(obstacle, groundHeightM(plot.ground, obstacle.eastM, obstacle.northM), treeYears, k)
-	);
+	const site = {
+		groundAt: (eastM: number, northM: number) => groundHeightM(plot.ground, eastM, northM),
+		treeYears,
+		latitudeDeg: place.latitudeDeg
+	};
+	const solids = plot.obstacles.flatMap((obstacle, k) => obstacleSolids(obstacle, site, k));
+	const horizons = terrainHorizons(plot.ground, east, north, up);
 	return {
 		place,
 		plot,
@@ -96,7 +103,8 @@ export function prepareField(input: FieldInput): Field {
 		treeYears,
 		skyline: prepareSkyline(plot.skyline),
 		models,
-		engine: new ShadeEngine(east, north, up, groupOf, groups, solids)
+		horizons,
+		engine: new ShadeEngine(east, north, up, groupOf, groups, solids, horizons)
 	};
 }
 
@@ -112,10 +120,12 @@ export function moveTracker(field: Field, index: number, eastM: number, northM: 
 	up[index] = groundHeightM(plot.ground, eastM, northM) + (tracker.axisHeightM ?? models[index].axisHeightM);
 	const trackers = layout.trackers.slice();
 	trackers[index] = tracker;
+	const horizons = field.horizons?.moved(index, east, north, up) ?? null;
 	return {
 		...field,
 		layout: { ...layout, trackers },
-		engine: new ShadeEngine(east, north, up, engine.groupOf, engine.groups, engine.solids)
+		horizons,
+		engine: new ShadeEngine(east, north, up, engine.groupOf, engine.groups, engine.solids, horizons)
 	};
 }
 
@@ -126,10 +136,12 @@ export function fieldSunHidden(field: Field, sun: SunDirection): boolean {
 
 /**
  * Shaded share of every table under one apparent sun, 0..1 in layout order; 1 where the front is not lit and
- * everywhere while the skyline or the horizon hides the sun. Exact (areas of polygons).
+ * everywhere while the skyline or the horizon hides the sun. Exact (areas of polygons). Trees stand as on `dayOfYear`
+ * (1..366) where it is given, else as on the day the engine was last turned to.
  */
-export function fieldShade(field: Field, sun: SunDirection): Float64Array {
+export function fieldShade(field: Field, sun: SunDirection, dayOfYear?: number): Float64Array {
 	const { engine } = field;
+	if (dayOfYear !== undefined) engine.setDay(dayOfYear);
 	const shares = new Float64Array(engine.count);
 	if (fieldSunHidden(field, sun)) return shares.fill(1);
 	engine.setSun(sun.azimuthDeg, sun.elevationDeg);
@@ -145,8 +157,9 @@ export const LIT_UNDER_CROWN = 0.5;
  * coordinates, x to the right seen facing the glass, y up the slope, metres from the middle. Glass under a crown
  * counts as lit when at least half of the beam passes.
  */
-export function fieldLitPieces(field: Field, sun: SunDirection): number[][][] {
+export function fieldLitPieces(field: Field, sun: SunDirection, dayOfYear?: number): number[][][] {
 	const { engine } = field;
+	if (dayOfYear !== undefined) engine.setDay(dayOfYear);
 	if (fieldSunHidden(field, sun)) return Array.from({ length: engine.count }, () => []);
 	engine.setSun(sun.azimuthDeg, sun.elevationDeg);
 	return Array.from({ length: engine.count }, (_, i) => engine.litPolygons(i, LIT_UNDER_CROWN));

@@ -1,7 +1,8 @@
 import type { SkylinePoint } from './document';
 import { prepareSkyline, sunHidden } from './geometry/skyline';
 import { ShadeEngine, type TableGroup } from './shade/engine';
-import { boxSolid, prismSolid, type Solid } from './shade/solid';
+import { boxSolid, prismSolid } from './shade/prism-solids';
+import type { Solid } from './shade/solid';
 import type { SunDirection } from './conventions';
 
 /** A rectangle of glass centred at a point, metres; normal at azimuth, tilt. */

@@ -1,10 +1,10 @@
 import type { Layout, Plot, Tracker, TrackerModel } from '../document';
-import { groundGradient } from '../geometry/ground';
+import { groundSlopeWithin, steepestRise } from '../geometry/ground';
 import { lowestCornerM, reachRadiusM } from '../machine/reach';
 import { boundaryEdges, insideBoundary, segmentDistanceM } from './polygon';
 
 export type FindingKind =
-	'circles-overlap' | 'set-back' | 'outside' | 'double-tag' | 'low-corner' | 'no-boundary';
+	'circles-overlap' | 'set-back' | 'outside' | 'double-tag' | 'low-corner' | 'steep-ground' | 'no-boundary';
 
 /** Something in a layout that should be looked at before it is built. */
 export interface Finding {
@@ -20,6 +20,8 @@ export interface Finding {
 
 /** A corner below this height above ground is reported, metres: common practice, no source. */
 export const LOW_CORNER_M = 0.5;
+/** Ground steeper than this under a tracker is reported, metres per metre: common practice, no source. */
+export const STEEP_GROUND = 0.15;
 /** Axis heights are named in steps of this, metres. */
 const AXIS_STEP_M = 0.05;
 /** Contacts within a millimetre are not findings: points come from grids with rounding. */
@@ -150,20 +152,28 @@ function tagFindings(trackers: readonly Tracker[]): Finding[] {
 	return findings;
 }
 
+/** Trackers of one model and axis height; on uneven ground the steepest foot speaks for them. */
 function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
-	const gradient = groundGradient(plot.ground);
-	const groups = new Map<string, { ids: string[]; model: TrackerModel; axisM: number }>();
-	for (const { tracker, model } of standing) {
+	const groups = new Map<string, { ids: string[]; model: TrackerModel; axisM: number; lowest: number }>();
+	// On planes every tracker of a kind has the same answer.
+	const known = new Map<string, number>();
+	for (const { tracker, model, reach } of standing) {
 		const axisM = tracker.axisHeightM ?? model.axisHeightM;
+		const rise = steepestRise(plot.ground, tracker.eastM, tracker.northM, reach);
+		const kind = `${model.id} ${axisM} ${rise}`;
+		const lowest = known.get(kind) ?? lowestCornerM(model, axisM, rise);
+		known.set(kind, lowest);
+		if (lowest >= LOW_CORNER_M - SLACK_M) continue;
 		const key = `${model.id} ${axisM}`;
 		const group = groups.get(key);
-		if (group) group.ids.push(tracker.id);
-		else groups.set(key, { ids: [tracker.id], model, axisM });
+		if (!group) groups.set(key, { ids: [tracker.id], model, axisM, lowest });
+		else {
+			group.ids.push(tracker.id);
+			group.lowest = Math.min(group.lowest, lowest);
+		}
 	}
 	const findings: Finding[] = [];
-	for (const { ids, model, axisM } of groups.values()) {
-		const lowest = lowestCornerM(model, axisM, gradient);
-		if (lowest >= LOW_CORNER_M - SLACK_M) continue;
+	for (const { ids, model, axisM, lowest } of groups.values()) {
 		const who = `${model.name}, axis at ${metres(axisM)}`;
 		// The corner rises with the axis, metre for metre.
 		const clearAxisM = Number(
@@ -184,9 +194,34 @@ function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
 	return findings;
 }
 
+function steepFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
+	const steep: Standing[] = [];
+	let most = 0;
+	for (const one of standing) {
+		const { tracker, reach } = one;
+		const { gradient } = groundSlopeWithin(plot.ground, tracker.eastM, tracker.northM, reach);
+		if (gradient <= STEEP_GROUND + 1e-9) continue;
+		steep.push(one);
+		most = Math.max(most, gradient);
+	}
+	if (steep.length === 0) return [];
+	const percent = (share: number) => `${(100 * share).toFixed(0)} %`;
+	const who =
+		steep.length === 1
+			? `${steep[0].tracker.tag} stands on ground`
+			: `${steep.length} trackers stand on ground`;
+	return [
+		{
+			kind: 'steep-ground',
+			trackerIds: steep.map(({ tracker }) => tracker.id),
+			message: `${who} that falls up to ${percent(most)}; above ${percent(STEEP_GROUND)} digging, lifting and mowing are hard: look for flatter places.`
+		}
+	];
+}
+
 /**
  * What is wrong or doubtful with a layout on its plot: circles that overlap, set-backs broken (holes included), trackers
- * outside, tags used twice, corners near the ground. Trackers whose model is missing are passed over. Two thousand
+ * outside, tags used twice, corners near the ground, steep ground. Trackers whose model is missing are passed over. Two thousand
  * trackers take a few milliseconds: near things are found through cells.
  */
 export function checkLayout(plot: Plot, layout: Layout): Finding[] {
@@ -212,6 +247,10 @@ export function checkLayout(plot: Plot, layout: Layout): Finding[] {
 	} else {
 		findings.push(...boundaryFindings(plot, standing, largest));
 	}
-	findings.push(...overlapFindings(standing, largest), ...cornerFindings(plot, standing));
+	findings.push(
+		...overlapFindings(standing, largest),
+		...cornerFindings(plot, standing),
+		...steepFindings(plot, standing)
+	);
 	return findings;
 }

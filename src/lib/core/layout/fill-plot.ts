@@ -1,6 +1,7 @@
 import { RADIANS_PER_DEGREE } from '../conventions';
 import type { BoundaryPart, PlanPoint, Plot, TrackerModel } from '../document';
 import { reachRadiusM } from '../machine/reach';
+import { obstacleShape } from '../shade/obstacle-outline';
 import { boundaryEdges } from './polygon';
 
 export interface FillInput {
@@ -116,28 +117,17 @@ class TurnedPlot {
 		const most = (values: number[]) => values.reduce((a, b) => Math.max(a, b), -Infinity);
 		this.bounds = { west: least(xs), east: most(xs), south: least(ys), north: most(ys) };
 		for (const obstacle of plot.obstacles) {
-			if (obstacle.kind === 'tree') {
-				const { eastM: x, northM: y } = obstacle;
-				const radius = reachM + Math.max(obstacle.crownRadiusM, obstacle.trunkRadiusM);
+			const shape = obstacleShape(obstacle);
+			if (shape.kind === 'circle') {
+				const [x, y] = shape.centre;
+				const radius = reachM + shape.radiusM;
 				this.barred.push({ edges: [turn([x, y, x, y])], radius, solid: false });
 				continue;
 			}
-			const t = obstacle.turnDeg * RADIANS_PER_DEGREE;
-			const corners = [
-				[-1, -1],
-				[1, -1],
-				[1, 1],
-				[-1, 1]
-			].map(([a, b]): PlanPoint => {
-				const x = (a * obstacle.sizeXM) / 2;
-				const y = (b * obstacle.sizeYM) / 2;
-				return [
-					obstacle.eastM + x * Math.cos(t) + y * Math.sin(t),
-					obstacle.northM - x * Math.sin(t) + y * Math.cos(t)
-				];
-			});
-			const edges = corners.map((c, k) => turn([...c, ...corners[(k + 1) % 4]] as Edge));
-			this.barred.push({ edges, radius: reachM, solid: true });
+			for (const ring of shape.rings) {
+				const edges = ring.map((c, k) => turn([...c, ...ring[(k + 1) % ring.length]]));
+				this.barred.push({ edges, radius: reachM, solid: true });
+			}
 		}
 	}
 
