@@ -33,7 +33,8 @@ const BLAME_EVERY = 3;
  */
 export function levelGroundTruth(field: Field): boolean {
 	const { layout, plot, models } = field;
-	if (plot.ground.kind === 'plane' && plot.ground.risePercent !== 0) return false;
+	const { ground } = plot;
+	if (ground.kind !== 'level' && (ground.kind !== 'plane' || ground.risePercent !== 0)) return false;
 	if (plot.obstacles.length > 0) return false;
 	const shape = (i: number): string => {
 		const m = models[i];
