@@ -10,6 +10,7 @@ export * from './mount';
 export * from './layout';
 export * from './winter-rule';
 export * from './document-version';
+export * from './energy';
 export * from './run';
 export * from './project';
 export * from './plan';

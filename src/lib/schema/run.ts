@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import type { RunInput } from '../core/results';
+import { energyRequestSchema, energySettingsSchema, runEnergySchema } from './energy';
 import { layoutSchema } from './layout';
 import { placeSchema } from './place';
 import { plotSchema } from './plot';
@@ -25,17 +26,24 @@ export const runInputSchema = z.strictObject({
 	year,
 	stepMinutes,
 	utcOffsetMinutes: quantity(-16 * 60, 16 * 60, 'minutes'),
-	treeYears
+	treeYears,
+	energy: energySettingsSchema.optional()
 }) satisfies z.ZodType<RunInput>;
 
 /** A run as it is asked for. */
-export const runRequestSchema = z.strictObject({
-	kind: runKindSchema,
-	layoutId: idSchema,
-	year: year.optional(),
-	stepMinutes: stepMinutes.default(10),
-	treeYears: treeYears.default(0)
-});
+export const runRequestSchema = z
+	.strictObject({
+		kind: runKindSchema,
+		layoutId: idSchema,
+		year: year.optional(),
+		stepMinutes: stepMinutes.default(10),
+		treeYears: treeYears.default(0),
+		energy: energyRequestSchema.optional()
+	})
+	.refine(({ kind, energy }) => kind === 'shade' || energy === undefined, {
+		path: ['energy'],
+		error: 'Energy belongs to a shade run: leave it out here, or ask for the kind "shade".'
+	});
 export type RunRequest = z.input<typeof runRequestSchema>;
 
 /** A run as it is shown: times are ISO 8601 with offset. */
@@ -52,6 +60,7 @@ export const runSchema = z.strictObject({
 	year: z.number().int(),
 	stepMinutes: z.number().int(),
 	treeYears: z.number(),
+	energy: runEnergySchema.nullable(),
 	inputHash: z.string(),
 	coreVersion: z.string(),
 	createdAt: z.iso.datetime({ offset: true }),

@@ -17,6 +17,7 @@ function aRun(change: Partial<Run> = {}): Run {
 		year: 2026,
 		stepMinutes: 10,
 		treeYears: 0,
+		energy: null,
 		inputHash: 'abc',
 		coreVersion: '1',
 		createdAt: '2026-01-01T00:00:00Z',

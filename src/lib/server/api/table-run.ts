@@ -21,6 +21,8 @@ export const runCalls = {
 		summary: 'Ask for a run of a layout as it stands; identical inputs answer the stored run',
 		tag,
 		cost: 5,
+		// Energy by a weather file brings 26,280 values.
+		maxBytes: 1024 * 1024,
 		body: runRequestSchema,
 		answer: { status: 202, description: 'The run, waiting, working or already done', schema: runSchema }
 	}),

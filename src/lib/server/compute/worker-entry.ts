@@ -1,7 +1,20 @@
 import { gzipSync } from 'node:zlib';
-import { fieldLoss, irradiance, mountScene, mountYear, shadeScene, shadeYear, sunPosition } from '../../core';
+import {
+	energyYear,
+	fieldLoss,
+	irradiance,
+	mountScene,
+	mountYear,
+	shadeScene,
+	shadeYear,
+	sunPosition
+} from '../../core';
+import type { RunInput, ShadeResult } from '../../core/results';
 import { roundedJson } from './rounded-json';
 import type { PackedResult, WorkerCall } from './tasks';
+
+/** Part of a run with energy that its shade is, for telling the progress. */
+const SHADE_01 = 0.25;
 
 /** Fewest milliseconds between two messages about progress. */
 const PROGRESS_EVERY_MS = 100;
@@ -11,7 +24,7 @@ export default function work(call: WorkerCall): unknown {
 	const { task } = call;
 	switch (task.kind) {
 		case 'shade-run':
-			return packed(call, (onProgress) => shadeYear(task.input, onProgress));
+			return packed(call, (onProgress) => shadeRun(task.input, onProgress));
 		case 'mount-run':
 			return packed(call, (onProgress) => mountYear(task.input, undefined, onProgress));
 		case 'sun': {
@@ -30,6 +43,15 @@ export default function work(call: WorkerCall): unknown {
 		case 'field-loss':
 			return fieldLoss(task.request);
 	}
+}
+
+/** The shade of a year and, when it was asked for, its energy. */
+function shadeRun(input: RunInput, onProgress: (done01: number) => boolean): ShadeResult | null {
+	const energyAsked = input.energy !== undefined;
+	const shade = shadeYear(input, (done01) => onProgress(energyAsked ? done01 * SHADE_01 : done01));
+	if (!shade || !energyAsked) return shade;
+	const energy = energyYear(input, (done01) => onProgress(SHADE_01 + (1 - SHADE_01) * done01));
+	return energy && { ...shade, energy };
 }
 
 /** Runs a year, tells how far it is, and packs the result; null when it was stopped. */

@@ -63,6 +63,7 @@ const done = (over: Partial<Run> = {}): Run => ({
 	year: 2026,
 	stepMinutes: 10,
 	treeYears: 0,
+	energy: null,
 	inputHash: 'x',
 	coreVersion: '1',
 	createdAt: '2026-01-01T00:00:00Z',

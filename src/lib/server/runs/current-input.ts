@@ -1,4 +1,5 @@
 import { eq } from 'drizzle-orm';
+import type { RunEnergy } from '$lib/schema/energy';
 import type { RunKind } from '$lib/schema/run';
 import { readLayout, readPlot } from '$lib/schema/document-version';
 import { db } from '../db';
@@ -39,7 +40,12 @@ const known = new Map<string, string>();
 const MAX_KNOWN = 500;
 
 /** The hash that a run of the layout as it stands would have. */
-export async function currentHash(layoutId: string, kind: RunKind, terms: RunTerms): Promise<string> {
+export async function currentHash(
+	layoutId: string,
+	kind: RunKind,
+	terms: RunTerms & { energy: RunEnergy | null }
+): Promise<string> {
+	const energyDigest = terms.energy?.digest;
 	const [row] = await db
 		.select({
 			place: projects.place,
@@ -57,12 +63,13 @@ export async function currentHash(layoutId: string, kind: RunKind, terms: RunTer
 		year: terms.year,
 		stepMinutes: terms.stepMinutes,
 		treeYears: terms.treeYears,
+		energyDigest,
 		...row
 	});
 	const found = known.get(key);
 	if (found) return found;
 	const current = await currentSources(layoutId);
-	const hash = runInputHash(kind, runInput(current.sources, terms));
+	const hash = runInputHash(kind, runInput(current.sources, terms), energyDigest);
 	if (current.layoutRevision === row.layoutRevision && current.plotRevision === row.plotRevision) {
 		if (known.size >= MAX_KNOWN) known.delete(known.keys().next().value ?? '');
 		known.set(key, hash);

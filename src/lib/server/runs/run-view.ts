@@ -16,6 +16,7 @@ export const runColumns = {
 	year: runs.year,
 	stepMinutes: runs.stepMinutes,
 	treeYears: runs.treeYears,
+	energy: runs.energy,
 	inputHash: runs.inputHash,
 	coreVersion: runs.coreVersion,
 	createdAt: runs.createdAt,

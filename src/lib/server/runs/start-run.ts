@@ -1,6 +1,6 @@
 import { and, count, desc, eq, inArray } from 'drizzle-orm';
 import type { z } from 'zod';
-import { CORE_VERSION } from '$lib/core';
+import { checkEnergy, CORE_VERSION, type EnergySettings, type Place } from '$lib/core';
 import type { Run, runRequestSchema } from '$lib/schema/run';
 import type { Actor } from '../auth/actor';
 import { db } from '../db';
@@ -10,7 +10,7 @@ import { AppError } from '../errors';
 import { requireProject } from '../guard';
 import { wakeJobs } from '../jobs';
 import { currentSources } from './current-input';
-import { runInput, runInputHash } from './run-input';
+import { runInput, runInputHash, toldEnergy } from './run-input';
 import { runColumns, runView } from './run-view';
 
 /** Runs of one project that may wait or work at a time. */
@@ -29,7 +29,8 @@ export async function startRun(
 	const { kind, layoutId, stepMinutes, treeYears } = request;
 	const current = await sourcesOf(projectId, layoutId);
 	const year = request.year ?? new Date().getUTCFullYear();
-	const input = runInput(current.sources, { year, stepMinutes, treeYears });
+	if (request.energy) refuseEnergy(current.sources.place, request.energy, stepMinutes);
+	const input = runInput(current.sources, { year, stepMinutes, treeYears }, request.energy);
 	const inputHash = runInputHash(kind, input);
 	const [same] = await db
 		.select(runColumns)
@@ -56,6 +57,7 @@ export async function startRun(
 		year,
 		stepMinutes,
 		treeYears,
+		energy: request.energy ? toldEnergy(request.energy) : null,
 		status: 'queued' as const,
 		progress: 0,
 		stage: 'waiting',
@@ -87,6 +89,14 @@ async function sourcesOf(projectId: string, layoutId: string) {
 		});
 	}
 	return current;
+}
+
+function refuseEnergy(place: Place, energy: EnergySettings, stepMinutes: number): void {
+	const refusal = checkEnergy(place, energy, stepMinutes);
+	if (!refusal) return;
+	throw new AppError('invalid', 'The energy of the year can’t be computed from this; nothing was started.', {
+		errors: [{ path: `energy.${refusal.path}`, message: refusal.message }]
+	});
 }
 
 async function refuseTooMany(projectId: string): Promise<void> {

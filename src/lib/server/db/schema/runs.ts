@@ -11,6 +11,7 @@ import {
 	varchar
 } from 'drizzle-orm/mysql-core';
 import type { RunInput } from '../../../core/results';
+import type { RunEnergy } from '../../../schema/energy';
 import { bytes, document, idColumn, moment, sha256Column } from '../columns';
 import { layouts } from './layouts';
 import { users } from './people';
@@ -33,6 +34,8 @@ export const runs = mysqlTable(
 		year: int('year').notNull(),
 		stepMinutes: int('step_minutes').notNull(),
 		treeYears: double('tree_years').notNull(),
+		/** Energy settings without the hours of a weather file; null for the shade alone. */
+		energy: document<RunEnergy>('energy'),
 		status: mysqlEnum('status', ['queued', 'working', 'done', 'failed', 'cancelled']).notNull(),
 		/** 0..1. */
 		progress: double('progress').notNull().default(0),
