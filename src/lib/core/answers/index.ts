@@ -1,0 +1,2 @@
+export type * from './results';
+export * from './answers-year';
