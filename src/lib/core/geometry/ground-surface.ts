@@ -8,7 +8,7 @@ export interface GroundSurface {
 	readonly extent: readonly [westM: number, southM: number, eastM: number, northM: number] | null;
 	/**
 	 * Tangent of the highest elevation of the ground seen from a point at height `upM` in a level direction (a unit
-	 * vector); -Infinity where no measured ground lies that way. Exact for the surface.
+	 * vector). Exact for the surface wherever it rises above that height; where it does not, below 0 or -Infinity.
 	 */
 	skylineTangent(eastM: number, northM: number, upM: number, towardsE: number, towardsN: number): number;
 	/** Triangles for drawing: x, y, z of each corner and the corners of each triangle. */

@@ -41,6 +41,7 @@ export function filledHeights(raster: Raster): Float64Array {
 export class RasterSurface implements GroundSurface {
 	readonly extent: readonly [number, number, number, number];
 	private readonly heights: Float64Array;
+	private readonly highestM: number;
 	private readonly columns: number;
 	private readonly rows: number;
 	private readonly cellM: number;
@@ -50,6 +51,7 @@ export class RasterSurface implements GroundSurface {
 		this.rows = raster.rows;
 		this.cellM = raster.cellM;
 		this.heights = filledHeights(raster);
+		this.highestM = this.heights.reduce((most, height) => Math.max(most, height), -Infinity);
 		this.extent = [
 			raster.westM,
 			raster.southM,
@@ -90,6 +92,8 @@ export class RasterSurface implements GroundSurface {
 	}
 
 	skylineTangent(eastM: number, northM: number, upM: number, towardsE: number, towardsN: number): number {
+		const aboveM = this.highestM - upM;
+		if (!(aboveM > 0)) return -Infinity;
 		const [west, south, east, north] = this.extent;
 		const { cellM } = this;
 		let from = 0;
@@ -136,6 +140,8 @@ export class RasterSurface implements GroundSurface {
 				if (top > Math.max(d, NEAREST_GROUND_M) && top < next)
 					highest = Math.max(highest, constant / top + slope + bend * top);
 			}
+			// Nothing further off can stand higher in the sky.
+			if (highest * next >= aboveM) break;
 			d = next;
 			start = end;
 		}

@@ -39,10 +39,10 @@ export class TerrainHorizons {
 		if (known) return known;
 		const { surface, east, north, up } = this;
 		const elevations = new Float64Array(BEARINGS);
-		let highest = -90;
+		let highest = 0;
 		for (let k = 0; k < BEARINGS; k++) {
 			const tangent = surface.skylineTangent(east[i], north[i], up[i], TOWARDS[k][0], TOWARDS[k][1]);
-			elevations[k] = Math.atan(tangent) / RADIANS_PER_DEGREE;
+			elevations[k] = tangent > 0 ? Math.atan(tangent) / RADIANS_PER_DEGREE : 0;
 			highest = Math.max(highest, elevations[k]);
 		}
 		this.highest[i] = highest;
@@ -50,7 +50,7 @@ export class TerrainHorizons {
 		return elevations;
 	}
 
-	/** Height of tracker i's near skyline at a bearing, degrees; -90 where no measured ground lies that way. */
+	/** Height of tracker i's near skyline at a bearing, degrees; 0 where no measured ground rises above its axis. */
 	heightDeg(i: number, azimuthDeg: number): number {
 		const elevations = this.skyline(i);
 		const at = normaliseDeg(azimuthDeg) / HORIZON_STEP_DEG;

@@ -54,6 +54,7 @@ export class TriangleSurface implements GroundSurface {
 	/** A triangle near the middle of each cell, to start walks from. */
 	private readonly starts: Int32Array;
 	private readonly cells: number;
+	private readonly highestM: number;
 	readonly extent: readonly [number, number, number, number];
 
 	constructor(points: readonly GroundPoint[]) {
@@ -62,6 +63,7 @@ export class TriangleSurface implements GroundSurface {
 		this.x = x.map((value) => value / PER_METRE);
 		this.y = y.map((value) => value / PER_METRE);
 		this.z = z;
+		this.highestM = z.reduce((most, height) => Math.max(most, height), -Infinity);
 		const box: [number, number, number, number] = [Infinity, Infinity, -Infinity, -Infinity];
 		for (let i = 0; i < x.length; i++) {
 			box[0] = Math.min(box[0], this.x[i]);
@@ -210,59 +212,106 @@ export class TriangleSurface implements GroundSurface {
 	}
 
 	skylineTangent(eastM: number, northM: number, upM: number, towardsE: number, towardsN: number): number {
-		const { corners, across, outline } = this.net;
+		// Ground is straight between two crossings, so (z - up) / distance is largest at one of them.
+		const aboveM = this.highestM - upM;
+		if (!(aboveM > 0)) return -Infinity;
+		const { corners, across } = this.net;
 		const { x, y, z } = this;
-		// Signed distance of a point from the ray's line, positive to its left.
-		const off = (p: number) => towardsE * (y[p] - northM) - towardsN * (x[p] - eastM);
+		const start = this.rayStart(eastM, northM, towardsE, towardsN);
+		if (start === null) return -Infinity;
+		// The ray leaves a triangle through the side from a, on its right (or on it), to b, on its left.
+		let { triangle, far } = start;
+		let a = corners[3 * triangle + ((far + 1) % 3)];
+		let b = corners[3 * triangle + ((far + 2) % 3)];
+		let offA = towardsE * (y[a] - northM) - towardsN * (x[a] - eastM);
+		let offB = towardsE * (y[b] - northM) - towardsN * (x[b] - eastM);
+		if (start.entering) {
+			[a, b] = [b, a];
+			[offA, offB] = [offB, offA];
+		}
 		let highest = -Infinity;
-		/** Looks at where the ray crosses a side; answers how far away, metres. */
-		const look = (a: number, b: number): number => {
-			const oa = off(a);
-			const w = oa / (oa - off(b));
+		for (let steps = corners.length; steps > 0; steps--) {
+			const w = offA / (offA - offB);
 			const away =
 				(x[a] + w * (x[b] - x[a]) - eastM) * towardsE + (y[a] + w * (y[b] - y[a]) - northM) * towardsN;
-			if (away > NEAREST_GROUND_M) highest = Math.max(highest, (z[a] + w * (z[b] - z[a]) - upM) / away);
-			return away;
-		};
-		// Ground is straight between two crossings, so (z - up) / distance is largest at one of them.
-		let t = this.find(eastM + AHEAD_M * towardsE, northM + AHEAD_M * towardsN);
-		if (t < 0) {
-			let entry = Infinity;
-			for (let k = 0; k < outline.length; k += 2) {
-				const a = corners[3 * outline[k] + ((outline[k + 1] + 1) % 3)];
-				const b = corners[3 * outline[k] + ((outline[k + 1] + 2) % 3)];
-				// The ray enters where a side of the outline runs from its left to its right.
-				if (!(off(a) > 0 && off(b) <= 0)) continue;
-				const before = highest;
-				const away = look(a, b);
-				if (away > 0 && away < entry) {
-					entry = away;
-					t = outline[k];
-				} else highest = before;
+			if (away > NEAREST_GROUND_M) {
+				highest = Math.max(highest, (z[a] + w * (z[b] - z[a]) - upM) / away);
+				// Nothing further off can stand higher in the sky.
+				if (highest * away >= aboveM) break;
 			}
-			if (t < 0) return -Infinity;
-		}
-		for (let steps = corners.length; steps > 0 && t >= 0; steps--) {
-			// A ray leaves through the side that runs from its right to its left.
-			let leaves = -1;
-			for (let k = 0; k < 3 && leaves < 0; k++) {
-				if (off(corners[3 * t + ((k + 1) % 3)]) <= 0 && off(corners[3 * t + ((k + 2) % 3)]) > 0) leaves = k;
+			const next = start.entering && steps === corners.length ? triangle : across[3 * triangle + far];
+			if (next < 0) break;
+			triangle = next;
+			// The new triangle's third corner decides through which of its other sides the ray leaves.
+			const base = 3 * triangle;
+			const k =
+				corners[base] !== a && corners[base] !== b
+					? 0
+					: corners[base + 1] !== a && corners[base + 1] !== b
+						? 1
+						: 2;
+			const c = corners[base + k];
+			const offC = towardsE * (y[c] - northM) - towardsN * (x[c] - eastM);
+			if (offC > 0) {
+				// Out between a and c: the corner opposite is b.
+				far = corners[base + ((k + 1) % 3)] === b ? (k + 1) % 3 : (k + 2) % 3;
+				b = c;
+				offB = offC;
+			} else {
+				far = corners[base + ((k + 1) % 3)] === a ? (k + 1) % 3 : (k + 2) % 3;
+				a = c;
+				offA = offC;
 			}
-			// A ray along a side or through a corner may graze the triangle it starts in: the next one is across.
-			if (leaves < 0) leaves = [0, 1, 2].find((k) => this.straddles(across[3 * t + k], off)) ?? -1;
-			else look(corners[3 * t + ((leaves + 1) % 3)], corners[3 * t + ((leaves + 2) % 3)]);
-			if (leaves < 0) break;
-			t = across[3 * t + leaves];
 		}
 		return highest;
 	}
 
-	private straddles(t: number, off: (p: number) => number): boolean {
-		if (t < 0) return false;
-		const { corners } = this.net;
-		let left = 0;
-		for (let k = 0; k < 3; k++) if (off(corners[3 * t + k]) > 0) left++;
-		return left === 1 || left === 2;
+	/**
+	 * The triangle that a ray begins in with the corner opposite to the side it leaves through; from beyond the outline the
+	 * triangle that it enters, with the corner opposite to the side it enters through. Null where it meets none.
+	 */
+	private rayStart(
+		eastM: number,
+		northM: number,
+		towardsE: number,
+		towardsN: number
+	): { triangle: number; far: number; entering: boolean } | null {
+		const { corners, across, outline } = this.net;
+		const { x, y } = this;
+		const off = (p: number) => towardsE * (y[p] - northM) - towardsN * (x[p] - eastM);
+		const leaving = (t: number): number =>
+			t < 0
+				? -1
+				: [0, 1, 2].findIndex(
+						(k) => off(corners[3 * t + ((k + 1) % 3)]) <= 0 && off(corners[3 * t + ((k + 2) % 3)]) > 0
+					);
+		const inside = this.find(eastM + AHEAD_M * towardsE, northM + AHEAD_M * towardsN);
+		if (inside >= 0) {
+			// A ray along a side or through a corner may only graze the triangle it starts in: the next one is across.
+			for (const triangle of [inside, ...across.subarray(3 * inside, 3 * inside + 3)]) {
+				const far = leaving(triangle);
+				if (far >= 0) return { triangle, far, entering: false };
+			}
+			return null;
+		}
+		let nearest = Infinity;
+		let found: { triangle: number; far: number; entering: boolean } | null = null;
+		for (let k = 0; k < outline.length; k += 2) {
+			const [triangle, far] = [outline[k], outline[k + 1]];
+			const a = corners[3 * triangle + ((far + 1) % 3)];
+			const b = corners[3 * triangle + ((far + 2) % 3)];
+			const [offA, offB] = [off(a), off(b)];
+			// The ray enters where a side of the outline runs from its left to its right.
+			if (!(offA > 0 && offB <= 0)) continue;
+			const w = offA / (offA - offB);
+			const away =
+				(x[a] + w * (x[b] - x[a]) - eastM) * towardsE + (y[a] + w * (y[b] - y[a]) - northM) * towardsN;
+			if (away > 0 && away < nearest) {
+				nearest = away;
+				found = { triangle, far, entering: true };
+			}
+		}
+		return found;
 	}
 
 	mesh(): { points: Float64Array; corners: Int32Array } {
