@@ -16,6 +16,7 @@ export * from './machine/aim';
 export * from './machine/pose';
 export * from './machine/reach';
 export * from './machine/modules';
+export * from './machine/slew';
 export * from './layout/polygon';
 export * from './layout/rows';
 export * from './layout/tags';

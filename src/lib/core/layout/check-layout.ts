@@ -160,8 +160,9 @@ function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
 	for (const { tracker, model, reach } of standing) {
 		const axisM = tracker.axisHeightM ?? model.axisHeightM;
 		const rise = steepestRise(plot.ground, tracker.eastM, tracker.northM, reach);
-		const kind = `${model.id} ${axisM} ${rise}`;
-		const lowest = known.get(kind) ?? lowestCornerM(model, axisM, rise);
+		const { posture } = tracker;
+		const kind = `${model.id} ${axisM} ${rise} ${posture.kind === 'standing' ? posture.tiltDeg : ''}`;
+		const lowest = known.get(kind) ?? lowestCornerM(model, axisM, rise, posture);
 		known.set(kind, lowest);
 		if (lowest >= LOW_CORNER_M - SLACK_M) continue;
 		const key = `${model.id} ${axisM}`;
@@ -232,7 +233,10 @@ export function checkLayout(plot: Plot, layout: Layout): Finding[] {
 	for (const tracker of layout.trackers) {
 		const model = models.get(tracker.modelId);
 		if (!model) continue;
-		const reach = reaches.get(model.id) ?? 0;
+		const reach =
+			tracker.posture.kind === 'standing'
+				? reachRadiusM(model, tracker.posture)
+				: (reaches.get(model.id) ?? 0);
 		largest = Math.max(largest, reach);
 		standing.push({ tracker, model, reach });
 	}

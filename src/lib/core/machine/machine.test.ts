@@ -1,9 +1,14 @@
+import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { tableAxes } from '../conventions';
+import { arcDeg, tableAxes, turnBetweenDeg } from '../conventions';
+import type { Posture } from '../document';
 import { testModel } from '../test-field';
 import { aimOf, arcContains, followAim } from './aim';
+import { moduleGrid } from './modules';
 import { poseOf } from './pose';
-import { leastPitchM, lowestCornerM, reachRadiusM } from './reach';
+import { HEAD_OUT_M, leastPitchM, lowestCornerM, reachRadiusM } from './reach';
+import { azimuthTravelDeg, slewSeconds } from './slew';
+import { mountPlaces } from '../mount/places';
 
 describe('axes of a table', () => {
 	it('facing south, u is east and v points north and up', () => {
@@ -129,5 +134,134 @@ describe('pose and reach', () => {
 
 	it('ground that rises takes clearance from the uphill corner', () => {
 		expect(lowestCornerM(testModel(), null, 0.1)).toBeLessThan(lowestCornerM(testModel()) - 0.2);
+	});
+});
+
+describe('whatever the machine', () => {
+	const angle = fc.double({ min: 0, max: 360, noNaN: true });
+	const machine = fc
+		.record({
+			widthM: fc.double({ min: 1, max: 12, noNaN: true }),
+			heightM: fc.double({ min: 1, max: 8, noNaN: true }),
+			frameMarginM: fc.double({ min: 0, max: 0.3, noNaN: true }),
+			tiltAxisOffsetM: fc.double({ min: -1, max: 1, noNaN: true }),
+			tableOffsetM: fc.double({ min: -1, max: 1, noNaN: true }),
+			centreShiftM: fc.double({ min: -1, max: 1, noNaN: true }),
+			minTiltDeg: fc.double({ min: 0, max: 40, noNaN: true }),
+			maxTiltDeg: fc.double({ min: 50, max: 90, noNaN: true }),
+			windTiltDeg: fc.double({ min: 0, max: 90, noNaN: true }),
+			stops: fc.option(fc.record({ fromDeg: angle, toDeg: angle })),
+			sensorHeadRadiusM: fc.double({ min: 0.01, max: 0.1, noNaN: true })
+		})
+		.map((changes) => testModel(changes));
+	const sky = fc.record({ azimuthDeg: angle, elevationDeg: fc.double({ min: -20, max: 90, noNaN: true }) });
+	const standing = fc.record({
+		kind: fc.constant('standing' as const),
+		azimuthDeg: angle,
+		tiltDeg: fc.double({ min: 0, max: 90, noNaN: true })
+	});
+	const posture = fc.oneof(
+		fc.constantFrom('following', 'flat', 'night', 'wind').map((kind) => ({ kind }) as Posture),
+		standing
+	);
+
+	it('no posture puts steel or a sensor head outside the reach circle, or a corner below the lowest', () => {
+		fc.assert(
+			fc.property(machine, posture, sky, (model, pose, sun) => {
+				const at = poseOf(model, null, 0, 0, 0, pose, sun);
+				const { u, v } = tableAxes(at.azimuthDeg, at.tiltDeg);
+				const place = (x: number, y: number) => [0, 1, 2].map((c) => at.centre[c] + x * u[c] + y * v[c]);
+				const reach = reachRadiusM(model, pose);
+				const lowest = lowestCornerM(model, null, 0, pose);
+				for (const sx of [-1, 1])
+					for (const sy of [-1, 1]) {
+						const corner = place(
+							sx * (model.widthM / 2 + model.frameMarginM),
+							sy * (model.heightM / 2 + model.frameMarginM)
+						);
+						expect(Math.hypot(corner[0], corner[1])).toBeLessThanOrEqual(reach + 1e-9);
+						expect(corner[2]).toBeGreaterThanOrEqual(lowest - 1e-9);
+					}
+				const { xs, ys } = mountPlaces(model, { spacingM: 0.5, outM: HEAD_OUT_M, forwardM: 0 });
+				xs.forEach((x, k) => {
+					const onSide = Math.abs(x) > model.widthM / 2;
+					const r = model.sensorHeadRadiusM;
+					const [e, n] = onSide ? place(x + Math.sign(x) * r, ys[k]) : place(x, ys[k] + Math.sign(ys[k]) * r);
+					expect(Math.hypot(e, n)).toBeLessThanOrEqual(reach + 1e-9);
+				});
+			}),
+			{ numRuns: 300 }
+		);
+	});
+
+	it('every aim is finite and reachable, under an overhead sun as well', () => {
+		const high = fc.record({
+			azimuthDeg: angle,
+			elevationDeg: fc.constantFrom(90, 89.9999999, 90 - 1e-12, 60)
+		});
+		fc.assert(
+			fc.property(machine, fc.oneof(sky, high), (model, sun) => {
+				const aim = aimOf(model, { kind: 'following' }, sun);
+				expect(Number.isFinite(aim.azimuthDeg + aim.tiltDeg)).toBe(true);
+				if (sun.elevationDeg <= 0) return;
+				expect(aim.tiltDeg).toBeGreaterThanOrEqual(model.minTiltDeg);
+				expect(aim.tiltDeg).toBeLessThanOrEqual(model.maxTiltDeg);
+				if (model.stops) {
+					const { fromDeg, toDeg } = model.stops;
+					const near = [fromDeg, toDeg].some((stop) => turnBetweenDeg(stop, aim.azimuthDeg) < 1e-9);
+					expect(near || arcContains(model.stops, aim.azimuthDeg)).toBe(true);
+				}
+				// With the sun overhead the table misses it by no more than its smallest tilt.
+				if (sun.elevationDeg > 89.999) {
+					const off = arcDeg(sun, { azimuthDeg: aim.azimuthDeg, elevationDeg: 90 - aim.tiltDeg });
+					expect(off).toBeLessThanOrEqual(model.minTiltDeg + 1e-3);
+				}
+			}),
+			{ numRuns: 500 }
+		);
+	});
+
+	it('turns along its sweep and never through the barred sector', () => {
+		const north = { stops: { fromDeg: 240, toDeg: 120 } };
+		expect(azimuthTravelDeg(north, 350, 10)).toBe(20);
+		expect(azimuthTravelDeg(north, 100, 260)).toBe(-200);
+		expect(azimuthTravelDeg({ stops: { fromDeg: 50, toDeg: 310 } }, 300, 60)).toBe(-240);
+		expect(azimuthTravelDeg({ stops: null }, 350, 10)).toBe(20);
+		expect(azimuthTravelDeg({ stops: null }, 10, 350)).toBe(-20);
+		// A stop itself, taken from the other side of the barred sector.
+		expect(azimuthTravelDeg({ stops: { fromDeg: 50, toDeg: 310 } }, 310, 49)).toBe(-260);
+		const drive = { stops: null, slewDegPerS: 0.5 };
+		const [low, high] = [
+			{ azimuthDeg: 100, tiltDeg: 80 },
+			{ azimuthDeg: 120, tiltDeg: 20 }
+		];
+		expect(slewSeconds(drive, low, high)).toBe(120);
+		expect(slewSeconds({ ...drive, tiltSlewDegPerS: 2 }, low, high)).toBe(40);
+	});
+});
+
+describe('modules of a table', () => {
+	it('are read from the grid and the glass where the model is silent', () => {
+		const model = testModel({ widthM: 6.2, heightM: 4, centreGapM: 0.2, moduleColumns: 3, moduleRows: 4 });
+		expect(moduleGrid(model)).toEqual({
+			columns: 3,
+			rows: 4,
+			orientation: 'landscape',
+			groupsPerModule: 3,
+			modulesPerString: 12,
+			moduleWidthM: 2,
+			moduleHeightM: 1
+		});
+		const said = {
+			...model,
+			moduleOrientation: 'portrait' as const,
+			groupsPerModule: 2,
+			modulesPerString: 6
+		};
+		expect(moduleGrid(said)).toMatchObject({
+			orientation: 'portrait',
+			groupsPerModule: 2,
+			modulesPerString: 6
+		});
 	});
 });

@@ -1,13 +1,15 @@
 import { RADIANS_PER_DEGREE } from '../conventions';
-import type { TrackerModel } from '../document';
+import type { Posture, TrackerModel } from '../document';
 
 /** How far a sensor head stands outside the glass unless its mount says otherwise, metres; common practice, no source. */
 export const HEAD_OUT_M = 0.08;
 
-/** Every tilt that the machine takes of itself, as a range in radians. */
-function tiltRange(model: TrackerModel): [low: number, high: number] {
-	const low = Math.min(model.minTiltDeg, model.night.tiltDeg, model.windTiltDeg);
-	const high = Math.max(model.maxTiltDeg, model.night.tiltDeg, model.windTiltDeg);
+/** Every tilt that the machine takes of itself, and the one it stands still at, as a range in radians. */
+function tiltRange(model: TrackerModel, posture?: Posture): [low: number, high: number] {
+	const rests = [model.night.tiltDeg, model.windTiltDeg];
+	if (posture?.kind === 'standing') rests.push(posture.tiltDeg);
+	const low = Math.min(model.minTiltDeg, ...rests);
+	const high = Math.max(model.maxTiltDeg, ...rests);
 	return [low * RADIANS_PER_DEGREE, high * RADIANS_PER_DEGREE];
 }
 
@@ -29,24 +31,26 @@ const forwardOf = (model: TrackerModel, y: number): { p: number; q: number } => 
 
 /**
  * Radius of the circle on plan that any part of the machine can enter in any posture, metres: the extreme corner of
- * the steel outline over the whole range of tilt, night and wind posture, and a sensor head on any edge.
+ * the steel outline over the whole range of tilt, night and wind posture, and a sensor head on any edge. A tracker that
+ * stands still at a tilt of its own (`posture`) reaches that tilt as well.
  */
-export function reachRadiusM(model: TrackerModel): number {
+export function reachRadiusM(model: TrackerModel, posture?: Posture): number {
 	const halfWidth = model.widthM / 2;
 	const halfHeight = model.heightM / 2;
 	const margin = model.frameMarginM;
-	const head = model.sensorHeadRadiusM > 0 ? HEAD_OUT_M + model.sensorHeadRadiusM : 0;
+	// A head never stands nearer to the glass than the frame's outer edge.
+	const head = model.sensorHeadRadiusM > 0 ? Math.max(HEAD_OUT_M, margin) + model.sensorHeadRadiusM : margin;
 	// Corners of the steel; heads beyond top and bottom; heads beyond the sides.
 	const outlines = [
 		[halfWidth + margin, halfHeight + margin],
-		[halfWidth, halfHeight + Math.max(margin, head)],
-		[halfWidth + Math.max(margin, head), halfHeight]
+		[halfWidth, halfHeight + head],
+		[halfWidth + head, halfHeight]
 	];
 	let reach = 0;
 	for (const [x, y] of outlines) {
 		for (const side of [-1, 1]) {
 			const { p, q } = forwardOf(model, side * y);
-			for (const t of extremeTilts(p, q, tiltRange(model))) {
+			for (const t of extremeTilts(p, q, tiltRange(model, posture))) {
 				const forward = model.tiltAxisOffsetM + p * Math.sin(t) + q * Math.cos(t);
 				reach = Math.max(reach, Math.hypot(forward, x));
 			}
@@ -57,13 +61,19 @@ export function reachRadiusM(model: TrackerModel): number {
 
 /**
  * Least height of a corner of the steel above the ground in any posture, metres; on ground that rises by `gradient`
- * metres per metre the corner is taken on the uphill side. `axisHeightM` overrides the model's when it is given.
+ * metres per metre the corner is taken on the uphill side. `axisHeightM` overrides the model's when it is given, and
+ * `posture` adds the tilt of a tracker that stands still.
  */
-export function lowestCornerM(model: TrackerModel, axisHeightM?: number | null, gradient = 0): number {
+export function lowestCornerM(
+	model: TrackerModel,
+	axisHeightM?: number | null,
+	gradient = 0,
+	posture?: Posture
+): number {
 	const axis = axisHeightM ?? model.axisHeightM;
 	const halfWidth = model.widthM / 2 + model.frameMarginM;
 	let lowest = Infinity;
-	const [low, high] = tiltRange(model);
+	const [low, high] = tiltRange(model, posture);
 	for (const side of [-1, 1]) {
 		const y = side * (model.heightM / 2 + model.frameMarginM);
 		const slope = model.centreShiftM + y;
