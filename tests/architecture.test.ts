@@ -174,6 +174,29 @@ describe('rooms import only what they may', () => {
 		expect(broken(kernels, rule)).toEqual([]);
 	});
 
+	it('method: core, schema and i18n; what it measures with also exchange and general packages, at build and in tests only', () => {
+		const measures = ({ path }: Source) => path.startsWith('lib/method/measure/');
+		const method = inRoom('method');
+		const words = method.filter((file) => !measures(file));
+		expect(words).not.toEqual([]);
+		const virtual = ({ specifier }: Import) => specifier === 'virtual:measured-checks';
+		const rule = (found: Import) =>
+			(virtual(found) || found.path !== null) &&
+			toRooms('method', 'schema', 'core', 'i18n')(found) &&
+			!found.path?.startsWith('lib/method/measure');
+		expect(broken(words, rule)).toEqual([]);
+		expect(
+			broken(
+				method.filter(measures),
+				(found) =>
+					toRooms('method', 'schema', 'core', 'i18n', 'exchange')(found) &&
+					![framework, sql, scene].some((pattern) => isPackage(found, pattern))
+			)
+		).toEqual([]);
+		const others = sources.filter((file) => !measures(file));
+		expect(broken(others, ({ path }) => !path?.startsWith('lib/method/measure'))).toEqual([]);
+	});
+
 	it('server: all but editor, charts and ui; its worker entry only core and schema', () => {
 		const rule = (found: Import) =>
 			toRooms('server', 'schema', 'access', 'core', 'sheets', 'exchange', 'i18n')(found) &&

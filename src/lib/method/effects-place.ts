@@ -1,0 +1,18 @@
+import type { Effect } from './effect';
+
+export const placeEffects = [
+	{
+		id: 'coordinates',
+		title: 'Degrees and metres',
+		words:
+			'The plan is a transverse Mercator projection about the project’s place, true to scale there. UTM eastings and northings are summed from the series of Krueger, with the convergence that turns a grid bearing into a true one.',
+		sources: [
+			'Krueger 1912, to the sixth power of n as Karney 2011, J. Geodesy 85:475, eqs. 35 and 36',
+			'WGS84; zones of TM 8358.2 (from memory)'
+		],
+		neglected: [
+			{ what: 'Scale of the plan away from its place', howBig: '1.2e-8 at 1 km, 5e-6 at 20 km' },
+			{ what: 'Seventh power of n', howBig: 'some nanometres' }
+		]
+	}
+] as const satisfies readonly Effect[];

@@ -1,0 +1,35 @@
+/** Every measured check, in the order in which the page shows its effects. */
+import type { Check } from '../check';
+import { clearSkyChecks } from './clear-sky';
+import { coordinateChecks } from './coordinates';
+import { decompositionChecks } from './decomposition';
+import { mountChecks } from './mounts';
+import { outsideAirChecks } from './outside-air';
+import { practiceChecks } from './practice';
+import { rayChecks } from './rays';
+import { shadeChecks } from './shade';
+import { spacingChecks } from './spacing';
+import { sunChecks } from './sun';
+import { sunLibraryChecks } from './sun-library';
+import { tiltedChecks } from './tilted';
+import { unionChecks } from './unions';
+import { weatherChecks } from './weather';
+import { yearLossChecks } from './year-loss';
+
+export const checks: readonly Check[] = [
+	...practiceChecks,
+	...sunChecks,
+	...sunLibraryChecks,
+	...shadeChecks,
+	...unionChecks,
+	...rayChecks,
+	...spacingChecks,
+	...mountChecks,
+	...yearLossChecks,
+	...outsideAirChecks,
+	...clearSkyChecks,
+	...decompositionChecks,
+	...tiltedChecks,
+	...weatherChecks,
+	...coordinateChecks
+];

@@ -1,0 +1,10 @@
+/** Even numbers 0..1 (1 excluded) from a seed, the same on every machine: mulberry32 (Tommy Ettinger 2017, public domain). */
+export function randomSource(seed: number): () => number {
+	let state = seed >>> 0;
+	return () => {
+		state = (state + 0x6d2b79f5) >>> 0;
+		let mixed = Math.imul(state ^ (state >>> 15), 1 | state);
+		mixed = (mixed + Math.imul(mixed ^ (mixed >>> 7), 61 | mixed)) ^ mixed;
+		return ((mixed ^ (mixed >>> 14)) >>> 0) / 4294967296;
+	};
+}
