@@ -1,19 +1,19 @@
 import { z } from 'zod';
-import type { BoundaryPart, Ground, Obstacle, Plot, SkylinePoint } from '../core/document';
-import { idSchema, optionalLabel, quantity } from './quantity';
+import type { BoundaryPart, Plot, SkylinePoint } from '../core/document';
+import { groundSchema } from './ground';
+import { obstacleSchema } from './obstacle';
+import { planPointSchema } from './plan-point';
 import { strayHole } from './plot-checks';
+import { quantity } from './quantity';
 import { ringProblem } from './ring';
 
-/** Furthest that anything of a plot may lie from the origin, metres. */
-export const MAX_REACH_M = 20_000;
+export { MAX_REACH_M, planPointSchema } from './plan-point';
+export * from './ground';
+export * from './obstacle';
+
 export const MAX_BOUNDARY_CORNERS = 5_000;
 export const MAX_OBSTACLES = 500;
 export const MAX_SKYLINE_POINTS = 3_600;
-
-const eastM = quantity(-MAX_REACH_M, MAX_REACH_M, 'm east');
-const northM = quantity(-MAX_REACH_M, MAX_REACH_M, 'm north');
-
-export const planPointSchema = z.tuple([eastM, northM], { error: 'Give a point as [eastM, northM].' });
 
 const ringSchema = z
 	.array(planPointSchema, { error: 'Give a ring as a list of [eastM, northM].' })
@@ -57,20 +57,6 @@ export const boundarySchema = z
 		}
 	});
 
-export const groundSchema = z.discriminatedUnion(
-	'kind',
-	[
-		z.strictObject({ kind: z.literal('level'), heightM: quantity(-1000, 1000, 'm') }),
-		z.strictObject({
-			kind: z.literal('plane'),
-			heightM: quantity(-1000, 1000, 'm'),
-			risePercent: quantity(0, 60, 'm of rise per 100 m'),
-			riseTowardsDeg: quantity(0, 360, 'degrees clockwise from true north')
-		})
-	],
-	{ error: 'Give the ground as "level" or "plane".' }
-) satisfies z.ZodType<Ground>;
-
 export const skylinePointSchema = z.strictObject({
 	azimuthDeg: quantity(0, 360, 'degrees clockwise from true north'),
 	elevationDeg: quantity(-30, 90, 'degrees above level')
@@ -92,53 +78,8 @@ export const skylineSchema = z
 		}
 	});
 
-const boxSchema = z.strictObject({
-	id: idSchema,
-	kind: z.literal('box'),
-	name: optionalLabel(80),
-	eastM,
-	northM,
-	sizeXM: quantity(0.01, 2000, 'm'),
-	sizeYM: quantity(0.01, 2000, 'm'),
-	heightM: quantity(0.01, 300, 'm'),
-	turnDeg: quantity(-360, 360, 'degrees')
-});
-
-const treeSchema = z
-	.strictObject({
-		id: idSchema,
-		kind: z.literal('tree'),
-		name: optionalLabel(80),
-		eastM,
-		northM,
-		heightM: quantity(0.1, 120, 'm'),
-		crownBaseM: quantity(0, 119, 'm'),
-		crownRadiusM: quantity(0.05, 40, 'm'),
-		trunkRadiusM: quantity(0, 5, 'm'),
-		crownTransmission: quantity(0, 1),
-		growthMPerYear: quantity(0, 5, 'm a year'),
-		maxHeightM: quantity(0.1, 120, 'm')
-	})
-	.superRefine((tree, context) => {
-		if (tree.crownBaseM >= tree.heightM) {
-			context.addIssue({
-				code: 'custom',
-				path: ['crownBaseM'],
-				message: 'The crown must begin below the top of the tree.'
-			});
-		}
-		if (tree.maxHeightM < tree.heightM) {
-			context.addIssue({
-				code: 'custom',
-				path: ['maxHeightM'],
-				message: 'The full-grown height must be at least the height of today.'
-			});
-		}
-	});
-
-export const obstacleSchema = z.discriminatedUnion('kind', [boxSchema, treeSchema], {
-	error: 'Give an obstacle of kind "box" or "tree".'
-}) satisfies z.ZodType<Obstacle>;
+/** Corners of all buildings and points of all walls of a plot, at most. */
+export const MAX_OBSTACLE_CORNERS = 5_000;
 
 export const plotSchema = z
 	.strictObject({
@@ -152,6 +93,18 @@ export const plotSchema = z
 		setBackM: quantity(0, 500, 'm')
 	})
 	.superRefine((plot, context) => {
+		const corners = plot.obstacles.reduce(
+			(sum, each) =>
+				sum + (each.kind === 'building' ? each.corners.length : each.kind === 'wall' ? each.line.length : 0),
+			0
+		);
+		if (corners > MAX_OBSTACLE_CORNERS) {
+			context.addIssue({
+				code: 'custom',
+				path: ['obstacles'],
+				message: `Buildings and walls have ${corners} corners in all; simplify them to at most ${MAX_OBSTACLE_CORNERS}.`
+			});
+		}
 		const seen = new Set<string>();
 		plot.obstacles.forEach((obstacle, index) => {
 			if (seen.has(obstacle.id)) {
