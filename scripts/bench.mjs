@@ -59,7 +59,9 @@ try {
 			target: 'node20',
 			minify: false,
 			lib: {
-				entry: { run: `${root}tests/bench/run.ts`, child: `${root}tests/bench/child.ts` },
+				entry: Object.fromEntries(
+					['run', 'child', 'part-worker'].map((name) => [name, `${root}tests/bench/${name}.ts`])
+				),
 				formats: ['es']
 			},
 			rolldownOptions: {

@@ -65,7 +65,7 @@ export class Bench {
 	/** Medians of some repeats after a warm-up. Processor time is the figure: others may work on the same machine. */
 	time(work: () => void, patience: Patience = {}): Timing {
 		const { quick } = this.options;
-		const { warmMs = quick ? 150 : 400, repeats = quick ? 3 : 7, budgetMs = quick ? 1000 : 4000 } = patience;
+		const { warmMs = quick ? 150 : 400, repeats = quick ? 3 : 7, budgetMs = quick ? 1000 : 2000 } = patience;
 		const began = performance.now();
 		let warmed = 0;
 		let onceMs = 0;

@@ -1,4 +1,5 @@
 import { Bench, type BenchOptions, type Figures } from './bench';
+import { energyFigures } from './energy';
 import { memoryFigures } from './memory';
 import { otherFigures } from './others';
 import { layoutFigures, mountFigures, previewFigures, yearFigures } from './runs';
@@ -12,6 +13,7 @@ const PARTS: [effects: string[], part: (bench: Bench) => void | Promise<void>][]
 	[['year.', 'yearUnlike.'], yearFigures],
 	[['moved.', 'day.', 'dayUnlike.'], previewFigures],
 	[['mounts.', 'mountsUnlike.'], mountFigures],
+	[['sky.', 'skyUnlike.', 'energy.'], energyFigures],
 	[['fill.', 'checks.'], layoutFigures],
 	[['memory.'], memoryFigures],
 	[['raysMesh', 'raysEmbree', 'unionPolygons.'], otherFigures]
