@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { BoundaryPart, PlanPoint } from '../document';
+import type { BoundaryPart, PlanPoint, Plot } from '../document';
 import { reachRadiusM } from '../machine/reach';
 import { testLayout, testModel, testPlot, testTracker } from '../test-field';
 import { checkLayout } from './check-layout';
@@ -10,7 +10,8 @@ import {
 	boundaryEdges,
 	boundaryPerimeterM,
 	insideBoundary,
-	segmentDistanceM
+	segmentDistanceM,
+	stretchesOnLand
 } from './polygon';
 import { rowPoints } from './rows';
 import { nextTags, rowLetters } from './tags';
@@ -222,6 +223,58 @@ describe('checking a layout', () => {
 		expect(pairs).toBeGreaterThan(10);
 		expect(found.filter((f) => f.kind === 'circles-overlap')).toHaveLength(pairs);
 		expect(found.filter((f) => f.kind === 'set-back')).toHaveLength(near);
+	});
+});
+
+describe('a straight piece across the land', () => {
+	it('is kept where it lies on land, without holes and the outside', () => {
+		const boundary = square(100, [pond]);
+		const at = (points: PlanPoint[][]) => points.map((pair) => pair.map(([e]) => e));
+		// The pond leaves out its own width.
+		const [west, , east] = [Math.min(...pond.map((p) => p[0])), 0, Math.max(...pond.map((p) => p[0]))];
+		const north = (Math.min(...pond.map((p) => p[1])) + Math.max(...pond.map((p) => p[1]))) / 2;
+		const found = at(stretchesOnLand(boundary, [-20, north], [130, north]));
+		expect(found).toHaveLength(2);
+		expect(found.flat()[0]).toBeCloseTo(0, 9);
+		expect(found.flat()[1]).toBeCloseTo(west, 9);
+		expect(found.flat()[2]).toBeCloseTo(east, 9);
+		expect(found.flat()[3]).toBeCloseTo(100, 9);
+		expect(stretchesOnLand(boundary, [1, 1], [2, 1])).toEqual([
+			[
+				[1, 1],
+				[2, 1]
+			]
+		]);
+		expect(stretchesOnLand(boundary, [-9, 1], [-2, 1])).toEqual([]);
+	});
+});
+
+describe('uneven ground', () => {
+	it('is looked at tracker by tracker: steep feet and low corners are those of the trackers that have them', () => {
+		const bank: Plot['ground'] = {
+			kind: 'points',
+			points: [-50, 50].flatMap((n): [number, number, number][] => [
+				[-60, n, 0],
+				[0, n, 0],
+				[30, n, 7.5],
+				[60, n, 7.5]
+			])
+		};
+		const layout = testLayout([testTracker(0, -30, 0), testTracker(1, 15, 0), testTracker(2, 46, 0)]);
+		const found = checkLayout(testPlot({ ground: bank }), layout);
+		const steep = found.find((finding) => finding.kind === 'steep-ground');
+		expect(steep?.trackerIds).toEqual(['t1']);
+		expect(steep?.message).toContain('A02 stands on ground that falls up to 25 %');
+		expect(found.find((finding) => finding.kind === 'low-corner')?.trackerIds).toEqual(['t1']);
+	});
+
+	it('is no finding at 15 % and is one above', () => {
+		const plane = (risePercent: number) =>
+			testPlot({ ground: { kind: 'plane', heightM: 0, risePercent, riseTowardsDeg: 30 } });
+		const kinds = (risePercent: number) =>
+			checkLayout(plane(risePercent), testLayout([testTracker(0, 0, 0)])).map(({ kind }) => kind);
+		expect(kinds(15)).not.toContain('steep-ground');
+		expect(kinds(15.1)).toContain('steep-ground');
 	});
 });
 

@@ -87,3 +87,32 @@ export function segmentDistanceM(
 	const t = length2 === 0 ? 0 : Math.min(1, Math.max(0, ((x - x0) * dx + (y - y0) * dy) / length2));
 	return Math.hypot(x - x0 - t * dx, y - y0 - t * dy);
 }
+
+/** The stretches of a straight piece that lie on the land, holes left out; metres. */
+export function stretchesOnLand(
+	parts: readonly BoundaryPart[],
+	from: PlanPoint,
+	to: PlanPoint
+): [PlanPoint, PlanPoint][] {
+	const dx = to[0] - from[0];
+	const dy = to[1] - from[1];
+	const cuts = [0, 1];
+	for (const [x0, y0, x1, y1] of boundaryEdges(parts)) {
+		const side0 = (x0 - from[0]) * dy - (y0 - from[1]) * dx;
+		const side1 = (x1 - from[0]) * dy - (y1 - from[1]) * dx;
+		if (side0 > 0 === side1 > 0) continue;
+		const w = side0 / (side0 - side1);
+		const along =
+			((x0 + w * (x1 - x0) - from[0]) * dx + (y0 + w * (y1 - y0) - from[1]) * dy) / (dx * dx + dy * dy);
+		if (along > 0 && along < 1) cuts.push(along);
+	}
+	cuts.sort((a, b) => a - b);
+	const at = (t: number): PlanPoint => [from[0] + t * dx, from[1] + t * dy];
+	const stretches: [PlanPoint, PlanPoint][] = [];
+	for (let k = 1; k < cuts.length; k++) {
+		if (!(cuts[k] > cuts[k - 1])) continue;
+		const middle = at((cuts[k - 1] + cuts[k]) / 2);
+		if (insideBoundary(parts, middle[0], middle[1])) stretches.push([at(cuts[k - 1]), at(cuts[k])]);
+	}
+	return stretches;
+}
