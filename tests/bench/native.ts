@@ -17,7 +17,8 @@ export async function buildNative(
 		await run('g++', ['-O2', '-std=c++17', join(sources, source), '-o', program, ...libraries]);
 		return program;
 	} catch (error) {
-		const reason = error instanceof Error ? error.message.split('\n').slice(0, 3).join(' ') : String(error);
+		const told = error instanceof Error ? error.message : String(error);
+		const reason = told.split('\n').find((line) => line.includes('error:')) ?? told.split('\n')[0];
 		say(`Figures of ${source} are left out, it was not built: ${reason}`);
 		return null;
 	}

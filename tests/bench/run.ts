@@ -1,6 +1,7 @@
 import { Bench, type BenchOptions, type Figures } from './bench';
 import { energyFigures } from './energy';
 import { memoryFigures } from './memory';
+import { nativeFigures } from './native-twin';
 import { otherFigures } from './others';
 import { layoutFigures, mountFigures, previewFigures, yearFigures } from './runs';
 import { listFigures, shareFigures, sunFigures } from './shares';
@@ -10,6 +11,7 @@ const PARTS: [effects: string[], part: (bench: Bench) => void | Promise<void>][]
 	[['sun.'], sunFigures],
 	[['lists.', 'listsUnlike.'], listFigures],
 	[['alike.', 'unlike.'], shareFigures],
+	[['native.', 'alike.regular.1000.ofNative'], nativeFigures],
 	[['year.', 'yearUnlike.'], yearFigures],
 	[['moved.', 'day.', 'dayUnlike.'], previewFigures],
 	[['mounts.', 'mountsUnlike.'], mountFigures],
