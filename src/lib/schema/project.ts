@@ -121,6 +121,6 @@ export interface OpenProject {
 	/** The library and the team's own. */
 	models: TrackerModel[];
 	/** Latest of the layout, null while none was asked for. */
-	runs: { shade: Run | null; mounts: Run | null };
+	runs: { shade: Run | null; mounts: Run | null; answers: Run | null };
 	plans: PlanSummary[];
 }

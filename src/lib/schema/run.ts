@@ -8,7 +8,9 @@ import { pageQuerySchema } from './page';
 import { idSchema, quantity, wholeNumber } from './quantity';
 import { winterRuleSchema } from './winter-rule';
 
-export const runKindSchema = z.enum(['shade', 'mounts'], { error: 'Give the kind as "shade" or "mounts".' });
+export const runKindSchema = z.enum(['shade', 'mounts', 'answers'], {
+	error: 'Give the kind as "shade", "mounts" or "answers".'
+});
 export type RunKind = z.infer<typeof runKindSchema>;
 
 export const runStatusSchema = z.enum(['queued', 'working', 'done', 'failed', 'cancelled']);

@@ -37,3 +37,9 @@ export const mailFrom = (): string => process.env.MAIL_FROM ?? 'Tiltyard <no-rep
 
 /** pino level. */
 export const logLevel = (): string => process.env.LOG_LEVEL ?? 'info';
+
+/** Threads that one run may take; null leaves it to the number of cores. */
+export function runThreads(): number | null {
+	const set = Number(process.env.TILTYARD_RUN_THREADS);
+	return Number.isInteger(set) && set >= 1 ? set : null;
+}

@@ -10,7 +10,7 @@ export const runCalls = {
 	listRuns: call({
 		method: 'GET',
 		path: '/api/v1/projects/{projectId}/runs',
-		summary: 'Shade and mount runs of a project, newest first',
+		summary: 'Shade, mount and answers runs of a project, newest first',
 		tag,
 		query: runListQuerySchema,
 		answer: { status: 200, description: 'A page of runs', schema: pageSchema(runSchema) }
@@ -40,8 +40,9 @@ export const runCalls = {
 		tag,
 		answer: {
 			status: 200,
-			description: 'The result; its form goes with the kind of the run',
-			schema: z.looseObject({ coreVersion: z.string() })
+			description:
+				'The result; its form goes with the kind of the run. It says which core made it and the hash of its input (results from before core 0.2.0 leave the hash out)',
+			schema: z.looseObject({ coreVersion: z.string(), inputHash: z.string().optional() })
 		}
 	}),
 	cancelRun: call({

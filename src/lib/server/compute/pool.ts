@@ -1,16 +1,11 @@
 import { createHash } from 'node:crypto';
 import { existsSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
-import { availableParallelism, tmpdir } from 'node:os';
+import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { Piscina } from 'piscina';
 import { logger } from '../log';
+import { THREADS } from './threads';
 import workerSource from './worker-entry.ts?worker-source';
-
-/** Stored runs at once: at least two, so that a quick one does not wait behind a long one. */
-export const RUN_THREADS = Math.max(2, Math.min(4, availableParallelism() - 1));
-
-/** One more thread than runs may take, so that a calculation asked for by the API never waits behind a long run. */
-const THREADS = RUN_THREADS + 1;
 
 /** Calculations that may wait for a thread before the server says that it is busy. */
 const MAX_WAITING = 64;

@@ -1,20 +1,9 @@
 import { gzipSync } from 'node:zlib';
-import {
-	energyYear,
-	fieldLoss,
-	irradiance,
-	mountScene,
-	mountYear,
-	shadeScene,
-	shadeYear,
-	sunPosition
-} from '../../core';
-import type { RunInput, ShadeResult } from '../../core/results';
+import { fieldLoss, irradiance, mountScene, shadeScene, sunPosition } from '../../core';
 import { roundedJson } from './rounded-json';
+import { methodOf } from './run-kinds';
 import type { PackedResult, WorkerCall } from './tasks';
-
-/** Part of a run with energy that its shade is, for telling the progress. */
-const SHADE_01 = 0.25;
+import { buffersOf } from './transfer';
 
 /** Fewest milliseconds between two messages about progress. */
 const PROGRESS_EVERY_MS = 100;
@@ -23,10 +12,18 @@ const PROGRESS_EVERY_MS = 100;
 export default function work(call: WorkerCall): unknown {
 	const { task } = call;
 	switch (task.kind) {
-		case 'shade-run':
-			return packed(call, (onProgress) => shadeRun(task.input, onProgress));
-		case 'mount-run':
-			return packed(call, (onProgress) => mountYear(task.input, undefined, onProgress));
+		case 'run': {
+			const method = methodOf(task.run);
+			const range = { from: 0, to: task.input.layout.trackers.length };
+			const part = method.part(task.input, progressOf(call), range);
+			return part !== null && handOver(call, packed(method.join(task.input, [part]), task.inputHash));
+		}
+		case 'run-part': {
+			const part = methodOf(task.run).part(task.input, progressOf(call), task.range);
+			return part !== null && handOver(call, part);
+		}
+		case 'run-join':
+			return handOver(call, packed(methodOf(task.run).join(task.input, task.parts), task.inputHash));
 		case 'sun': {
 			const { latitudeDeg, longitudeDeg, times } = task.request;
 			return times.map((time) => ({
@@ -45,33 +42,31 @@ export default function work(call: WorkerCall): unknown {
 	}
 }
 
-/** The shade of a year and, when it was asked for, its energy. */
-function shadeRun(input: RunInput, onProgress: (done01: number) => boolean): ShadeResult | null {
-	const energyAsked = input.energy !== undefined;
-	const shade = shadeYear(input, (done01) => onProgress(energyAsked ? done01 * SHADE_01 : done01));
-	if (!shade || !energyAsked) return shade;
-	const energy = energyYear(input, (done01) => onProgress(SHADE_01 + (1 - SHADE_01) * done01));
-	return energy && { ...shade, energy };
-}
-
-/** Runs a year, tells how far it is, and packs the result; null when it was stopped. */
-function packed(
-	call: WorkerCall,
-	compute: (onProgress: (done01: number) => boolean) => unknown
-): PackedResult | null {
+/** Tells how far a run is, not too often, and whether to go on. */
+function progressOf(call: WorkerCall): (done01: number) => boolean {
 	const stop = call.stop ? new Int32Array(call.stop) : null;
-	const begun = performance.now();
-	let toldAt = begun;
-	const result = compute((done01) => {
+	let toldAt = performance.now();
+	return (done01) => {
 		const now = performance.now();
 		if (now - toldAt >= PROGRESS_EVERY_MS) {
 			toldAt = now;
 			call.port?.postMessage({ done01 });
 		}
 		return stop === null || Atomics.load(stop, 0) === 0;
-	});
-	if (result === null) return null;
-	const computeMs = performance.now() - begun;
-	const text = Buffer.from(roundedJson(result));
-	return { gzip: gzipSync(text, { level: 4 }), jsonBytes: text.byteLength, computeMs };
+	};
+}
+
+/** Sends what a run found through its port, the buffers without a copy: a thread's plain answer would copy them. */
+function handOver(call: WorkerCall, found: object): boolean {
+	call.port?.postMessage({ found }, buffersOf(found));
+	return true;
+}
+
+/** A result as it is stored: it says itself which core made it and from what. */
+function packed(result: { coreVersion: string }, inputHash: string): PackedResult {
+	const { coreVersion, ...found } = result;
+	const text = Buffer.from(roundedJson({ coreVersion, inputHash, ...found }));
+	// Copied out of Node's shared pool of small buffers, which cannot be handed over.
+	const gzip = new Uint8Array(gzipSync(text, { level: 4 }));
+	return { gzip, jsonBytes: text.byteLength };
 }

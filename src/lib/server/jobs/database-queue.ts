@@ -48,7 +48,7 @@ export const databaseQueue: RunQueue = {
 				.where(and(eq(runs.id, next.id), free()));
 			if (taken.affectedRows === 0) continue;
 			const [row] = await db
-				.select({ id: runs.id, kind: runs.kind, input: runs.input })
+				.select({ id: runs.id, kind: runs.kind, input: runs.input, inputHash: runs.inputHash })
 				.from(runs)
 				.where(eq(runs.id, next.id));
 			if (!row) continue;

@@ -1,4 +1,5 @@
-import { RUN_THREADS, computePool, stopPool } from '../compute/pool';
+import { computePool, stopPool } from '../compute/pool';
+import { RUNS_AT_ONCE } from '../compute/threads';
 import { logger } from '../log';
 import { databaseQueue } from './database-queue';
 import { workOnRun, type WorkingRun } from './work-on-run';
@@ -47,7 +48,7 @@ export function wakeJobs(): void {
 }
 
 async function takeAll(jobs: Dispatcher): Promise<void> {
-	while (!jobs.closing && jobs.working.size < RUN_THREADS) {
+	while (!jobs.closing && jobs.working.size < RUNS_AT_ONCE) {
 		const run = await databaseQueue.take();
 		if (!run) return;
 		const working = workOnRun(databaseQueue, run);

@@ -6,6 +6,8 @@ export interface TakenRun {
 	id: string;
 	kind: RunKind;
 	input: RunInput;
+	/** Told in the result. */
+	inputHash: string;
 	/** Proves that it is still ours when its result comes in. */
 	leaseId: string;
 }

@@ -1,6 +1,5 @@
-import { MessageChannel } from 'node:worker_threads';
-import { computePool } from '../compute/pool';
-import type { PackedResult, WorkerCall } from '../compute/tasks';
+import type { RunKind } from '$lib/schema/run';
+import { computeRun } from '../compute/compute-run';
 import { logger } from '../log';
 import type { RunQueue, TakenRun } from './queue';
 import { tellRun } from './run-events';
@@ -11,14 +10,15 @@ const REPORT_EVERY_MS = 1_000;
 /** A thread that was asked to stop and has not after this long is ended, milliseconds. */
 const STOP_PATIENCE_MS = 2_000;
 
-const stages = {
-	'shade-run': 'computing the shade of the year',
-	'mount-run': 'computing the mounts over the year'
+const stages: Record<RunKind, string> = {
+	shade: 'computing the shade of the year',
+	mounts: 'computing the mounts over the year',
+	answers: 'finding who takes whose light'
 };
 
 export type StopReason = 'asked' | 'lost' | 'shutdown';
 
-/** A run that works in a thread of this process. */
+/** A run that works in threads of this process. */
 export interface WorkingRun {
 	stop(reason: StopReason): void;
 	/** Settles when it has ended and its end is stored. */
@@ -28,8 +28,7 @@ export interface WorkingRun {
 export function workOnRun(queue: RunQueue, run: TakenRun): WorkingRun {
 	const flag = new SharedArrayBuffer(4);
 	const abort = new AbortController();
-	const { port1, port2 } = new MessageChannel();
-	const kind = run.kind === 'shade' ? 'shade-run' : 'mount-run';
+	const stage = stages[run.kind];
 	let reason: StopReason | null = null;
 	let progress = 0;
 	let patience: NodeJS.Timeout | undefined;
@@ -41,14 +40,14 @@ export function workOnRun(queue: RunQueue, run: TakenRun): WorkingRun {
 		patience = setTimeout(() => abort.abort(), STOP_PATIENCE_MS);
 	};
 
-	port1.on('message', (message: { done01: number }) => {
-		progress = Math.max(progress, Math.min(1, message.done01));
-		tellRun(run.id, { status: 'working', progress, stage: stages[kind] });
-	});
-	tellRun(run.id, { status: 'working', progress, stage: stages[kind] });
+	const onProgress = (done01: number) => {
+		progress = Math.max(progress, Math.min(1, done01));
+		tellRun(run.id, { status: 'working', progress, stage });
+	};
+	tellRun(run.id, { status: 'working', progress, stage });
 
 	const reports = setInterval(() => {
-		queue.report(run, progress, stages[kind]).then(
+		queue.report(run, progress, stage).then(
 			(answer) => {
 				if (answer !== 'go-on') stop(answer === 'stop' ? 'asked' : 'lost');
 			},
@@ -58,16 +57,13 @@ export function workOnRun(queue: RunQueue, run: TakenRun): WorkingRun {
 
 	const work = async () => {
 		try {
-			const call: WorkerCall = { task: { kind, input: run.input }, stop: flag, port: port2 };
-			const packed = (await computePool().run(call, {
-				transferList: [port2],
-				signal: abort.signal
-			})) as PackedResult | null;
+			const begun = performance.now();
+			const packed = await computeRun(run, { stop: flag, signal: abort.signal, onProgress });
 			if (packed) {
 				const stored = await queue.finish(run, {
 					status: 'done',
 					gzip: packed.gzip,
-					computeMs: packed.computeMs
+					computeMs: performance.now() - begun
 				});
 				if (stored) tellRun(run.id, { status: 'done', progress: 1, stage: 'done' });
 			} else await endStopped();
@@ -77,7 +73,6 @@ export function workOnRun(queue: RunQueue, run: TakenRun): WorkingRun {
 		} finally {
 			clearInterval(reports);
 			clearTimeout(patience);
-			port1.close();
 		}
 	};
 

@@ -32,10 +32,11 @@ export async function openProject(
 		? layouts.find((layout) => layout.id === layoutId)
 		: layouts.reduce((last, layout) => (layout.updatedAt > last.updatedAt ? layout : last), layouts[0]);
 	if (!chosen) throw notFound();
-	const [layout, shade, mounts, plans] = await Promise.all([
+	const [layout, shade, mounts, answers, plans] = await Promise.all([
 		getLayout(actor, chosen.id),
 		latestRun(actor, chosen.id, 'shade'),
 		latestRun(actor, chosen.id, 'mounts'),
+		latestRun(actor, chosen.id, 'answers'),
 		can(project.role, 'plan.read') ? listPlans(actor, projectId, { limit: PLANS_SHOWN }) : null
 	]);
 	return {
@@ -44,7 +45,7 @@ export async function openProject(
 		layouts,
 		layout: { id: layout.id, name: layout.name, revision: layout.revision, document: layout.document },
 		models,
-		runs: { shade, mounts },
+		runs: { shade, mounts, answers },
 		plans: plans?.items ?? []
 	};
 }

@@ -38,7 +38,7 @@ export function runInput(sources: RunSources, terms: RunTerms, energy?: EnergySe
 
 /**
  * SHA-256 of what a run's result depends on, with the core's version. The chosen mounts are left out (choosing one does
- * not make a run out of date), and for mount runs the winter rule too. Energy settings count by their digest, so that the
+ * not make a run out of date), and the winter rule where the result says nothing of it. Energy settings count by their digest, so that the
  * hash of a run as it stands can be had without the hours of a weather file.
  */
 export function runInputHash(
@@ -50,7 +50,7 @@ export function runInputHash(
 		...input,
 		energy: energyDigest,
 		layout: { ...input.layout, mounts: null },
-		winterRule: kind === 'mounts' ? defaultWinterRule : input.winterRule
+		winterRule: kind === 'shade' ? input.winterRule : defaultWinterRule
 	};
 	return createHash('sha256')
 		.update(canonicalJson({ kind, core: CORE_VERSION, input: counted }))

@@ -27,7 +27,7 @@ export const runs = mysqlTable(
 		layoutId: idColumn('layout_id')
 			.notNull()
 			.references(() => layouts.id, { onDelete: 'cascade' }),
-		kind: mysqlEnum('kind', ['shade', 'mounts']).notNull(),
+		kind: mysqlEnum('kind', ['shade', 'mounts', 'answers']).notNull(),
 		layoutRevision: int('layout_revision').notNull(),
 		plotRevision: int('plot_revision').notNull(),
 		/** What the run was asked for, also inside its input: lists show these without reading the whole. */

@@ -1,0 +1,1 @@
+ALTER TABLE `runs` MODIFY COLUMN `kind` enum('shade','mounts','answers') NOT NULL;
