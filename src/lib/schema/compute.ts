@@ -78,16 +78,21 @@ export const sceneObstacleSchema = z.discriminatedUnion(
 			heightM: sizeM,
 			turnDeg: quantity(-720, 720, 'degrees')
 		}),
-		z.object({
-			kind: z.literal('prism'),
-			sides: wholeNumber(3, 200),
-			eastM: metres,
-			northM: metres,
-			baseM: metres,
-			bottomRadiusM: quantity(0, 10_000, 'm'),
-			topRadiusM: quantity(0, 10_000, 'm'),
-			heightM: sizeM
-		})
+		z
+			.object({
+				kind: z.literal('prism'),
+				sides: wholeNumber(3, 200),
+				eastM: metres,
+				northM: metres,
+				baseM: metres,
+				bottomRadiusM: quantity(0, 10_000, 'm'),
+				topRadiusM: quantity(0, 10_000, 'm'),
+				heightM: sizeM
+			})
+			.refine(({ bottomRadiusM, topRadiusM }) => Math.max(bottomRadiusM, topRadiusM) >= 0.001, {
+				path: ['bottomRadiusM'],
+				error: 'Give the prism a radius at its bottom or its top.'
+			})
 	],
 	{ error: 'Give an obstacle of kind "box" or "prism".' }
 );

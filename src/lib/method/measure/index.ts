@@ -3,6 +3,7 @@ import type { Check } from '../check';
 import { clearSkyChecks } from './clear-sky';
 import { coordinateChecks } from './coordinates';
 import { decompositionChecks } from './decomposition';
+import { fuzzChecks } from './fuzz';
 import { mountChecks } from './mounts';
 import { outsideAirChecks } from './outside-air';
 import { practiceChecks } from './practice';
@@ -23,6 +24,7 @@ export const checks: readonly Check[] = [
 	...shadeChecks,
 	...unionChecks,
 	...rayChecks,
+	...fuzzChecks,
 	...spacingChecks,
 	...mountChecks,
 	...yearLossChecks,
