@@ -41,12 +41,19 @@ function sunComesTo(latitudeDeg: number, azimuthDeg: number, elevationDeg: numbe
 	return Math.abs(sine) <= Math.sin(MOST_DECLINATION_DEG * RADIANS_PER_DEGREE);
 }
 
+/** Whether the sun ever stands there, and clear of the skyline. */
+function isSun(field: Field, azimuthDeg: number, elevationDeg: number): boolean {
+	return (
+		sunComesTo(field.place.latitudeDeg, azimuthDeg, elevationDeg) &&
+		!fieldSunHidden(field, { azimuthDeg, elevationDeg })
+	);
+}
+
 /** Heights at one bearing to which the sun comes and which the skyline leaves free, from above. */
 function* stepsDown(field: Field, azimuthDeg: number): Generator<number> {
 	for (let step = Math.floor(90 / HEIGHT_STEP_DEG); step >= 0; step--) {
 		const elevationDeg = heightDeg(step);
-		if (!sunComesTo(field.place.latitudeDeg, azimuthDeg, elevationDeg)) continue;
-		if (!fieldSunHidden(field, { azimuthDeg, elevationDeg })) yield step;
+		if (isSun(field, azimuthDeg, elevationDeg)) yield step;
 	}
 }
 
@@ -81,7 +88,8 @@ export function clearHeightPart(
 	const topByBearing = new Int16Array(BEARINGS).fill(NEVER);
 	const topBySector = new Int16Array(n * SECTORS).fill(NEVER);
 	const top = new Int16Array(n).fill(NEVER);
-	const topBearing = new Int16Array(n);
+	/** Bearings at which each is shaded at its highest step: any of them may come out highest. */
+	const topBearings: number[][] = Array.from({ length: n }, () => []);
 	const shares = new Float64Array(engine.count);
 	for (let b = 0; b < BEARINGS; b++) {
 		if (onProgress && !onProgress(b / BEARINGS)) return null;
@@ -97,21 +105,27 @@ export function clearHeightPart(
 				if (step > topBySector[o]) topBySector[o] = step;
 				if (step > top[at]) {
 					top[at] = step;
-					topBearing[at] = b;
+					topBearings[at] = [];
 				}
+				if (step === top[at]) topBearings[at].push(b);
 			}
 		}
 	}
 	const aboveDeg = new Float64Array(n).fill(NaN);
 	const azimuths = new Float64Array(n).fill(NaN);
 	for (let at = 0; at < n; at++) {
-		if (top[at] === NEVER) continue;
-		const azimuthDeg = topBearing[at] * BEARING_STEP_DEG;
-		azimuths[at] = azimuthDeg;
-		aboveDeg[at] = shadeEndDeg(heightDeg(top[at]), heightDeg(top[at] + 1), (elevationDeg) => {
-			engine.setSun(azimuthDeg, elevationDeg, false);
-			return engine.cosine(from + at) > 0 && engine.share(from + at) > SHADED_FROM;
-		});
+		for (const b of topBearings[at]) {
+			const azimuthDeg = b * BEARING_STEP_DEG;
+			const end = shadeEndDeg(heightDeg(top[at]), heightDeg(top[at] + 1), (elevationDeg) => {
+				if (!isSun(field, azimuthDeg, elevationDeg)) return false;
+				engine.setSun(azimuthDeg, elevationDeg, false);
+				return engine.cosine(from + at) > 0 && engine.share(from + at) > SHADED_FROM;
+			});
+			// Never so for the first, against NaN.
+			if (end <= aboveDeg[at]) continue;
+			aboveDeg[at] = end;
+			azimuths[at] = azimuthDeg;
+		}
 	}
 	return { topByBearing, aboveDeg, azimuthDeg: azimuths, topBySector };
 }
@@ -139,6 +153,7 @@ export function fieldClearHeight(field: Field, parts: readonly ClearHeightPart[]
 			continue;
 		}
 		const end = shadeEndDeg(heightDeg(step), heightDeg(step + 1), (elevationDeg) => {
+			if (!isSun(field, azimuthDeg, elevationDeg)) return false;
 			engine.setSun(azimuthDeg, elevationDeg);
 			engine.shares(shares);
 			return shares.some((share, i) => share > SHADED_FROM && engine.cosine(i) > 0);

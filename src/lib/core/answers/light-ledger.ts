@@ -158,9 +158,10 @@ export function lightLedger(
 			without[at] += kwh;
 			if (engine.horizons?.hides(i, sun.azimuthDeg, sun.elevationDeg)) {
 				const row = rowOf(at, BY_GROUND);
+				const place = detailOf(row);
 				alone.values[row] += kwh;
-				removal.values[detailOf(row)] += kwh;
-				when.values[detailOf(row) * WHENS + whenAt] += kwh;
+				removal.values[place] += kwh;
+				when.values[place * WHENS + whenAt] += kwh;
 				lost[at] += kwh;
 				lostWhen[at * WHENS + whenAt] += kwh;
 				lostHour[at * HOURS + sun.hour] += kwh;
@@ -211,7 +212,10 @@ export function lightLedger(
 					const o = 3 * (k * M + m);
 					const d = moves.vectors.subarray(o, o + 3);
 					const change = set.shareMoved(g, dot3(U, d), dot3(V, d)) - share;
-					if (change !== 0) move.values[detailOf(rowOf(at, k)) * M + m] += kwh * change;
+					if (change === 0) continue;
+					// The row first: making one may put the values elsewhere.
+					const place = detailOf(rowOf(at, k));
+					move.values[place * M + m] += kwh * change;
 				}
 			}
 		}
