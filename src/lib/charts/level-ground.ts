@@ -1,3 +1,4 @@
+import { isMeasured } from '$lib/core';
 import type { Layout, Plot } from '$lib/core/document';
 
 /**
@@ -9,6 +10,7 @@ export function unlevelReasons(plot: Plot, layout: Layout): string[] {
 	if (plot.ground.kind === 'plane' && plot.ground.risePercent !== 0) {
 		reasons.push(`the ground rises ${Math.abs(plot.ground.risePercent)} m in 100 m`);
 	}
+	if (isMeasured(plot.ground)) reasons.push('the ground is uneven');
 	const used = new Set(layout.trackers.map((tracker) => tracker.modelId));
 	if (used.size > 1) reasons.push('the trackers are of different models');
 	const axisHeights = new Set(

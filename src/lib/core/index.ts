@@ -5,7 +5,7 @@ export type * from './document';
 export type * from './results';
 export * from './sun/position';
 export * from './sun/day';
-export * from './sun/day-of-year';
+export * from './sun/date-day';
 export * from './geometry/ground';
 export type { GroundSurface } from './geometry/ground-surface';
 export * from './geometry/terrain-horizon';

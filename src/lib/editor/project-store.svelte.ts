@@ -2,7 +2,9 @@ import { getContext, setContext } from 'svelte';
 import { can } from '$lib/access';
 import {
 	checkLayout,
+	dayOfDate,
 	fieldShade,
+	isMeasured,
 	type DayShade,
 	type Layout,
 	type Plot,
@@ -63,7 +65,7 @@ export class ProjectStore {
 	readonly readOnly = $derived(!can(this.project.role, 'layout.edit'));
 	readonly field = $derived.by(() => this.#fields.get(this.project.place, this.plot, this.layout));
 	/** Shaded share of each tracker at the chosen moment, in layout order. */
-	readonly shares = $derived.by(() => fieldShade(this.field, this.sun));
+	readonly shares = $derived.by(() => fieldShade(this.field, this.sun, this.dayOfYear));
 	readonly findings = $derived(checkLayout(this.plot, this.layout));
 	readonly canUndo = $derived(this.#history.done.length > 0 && !this.readOnly);
 	readonly canRedo = $derived(this.#history.undone.length > 0 && !this.readOnly);
@@ -144,6 +146,11 @@ export class ProjectStore {
 		return this.moment.sun;
 	}
 
+	/** Of the chosen date, 1..366: trees stand in leaf or bare. */
+	get dayOfYear(): number {
+		return dayOfDate(this.moment.date);
+	}
+
 	get utcOffsetMinutes(): number {
 		return this.moment.utcOffsetMinutes;
 	}
@@ -163,7 +170,12 @@ export class ProjectStore {
 
 	/** Edits a copy of the plot: one undo step, or part of the gesture that is under way. */
 	editPlot(label: string, edit: (draft: Plot) => void, options: EditOptions = {}): void {
-		const draft = structuredClone(this.plot);
+		// Measured ground is large and only ever replaced whole: it is shared, and so is the surface made from it.
+		const { ground, ...rest } = this.plot;
+		const draft: Plot = {
+			...structuredClone(rest),
+			ground: isMeasured(ground) ? ground : structuredClone(ground)
+		};
 		edit(draft);
 		this.#apply(label, { plot: draft, layout: this.layout }, options);
 	}

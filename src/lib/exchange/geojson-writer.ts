@@ -1,4 +1,4 @@
-import type { Place, PlanPoint, Plot } from '../core';
+import { buildingRing, wallLine, type Obstacle, type Place, type PlanPoint, type Plot } from '../core';
 import type { PegRow } from '../schema/peg-row';
 import { lonLatFromLocal } from './plan-projection';
 
@@ -48,8 +48,7 @@ export function writeGeoJson(place: Place, plot: Plot, rows: PegRow[], names: Pl
 		features.push({
 			type: 'Feature',
 			id: `obstacle-${obstacle.id}`,
-			geometry: { type: 'Point', coordinates: at(obstacle.eastM, obstacle.northM) },
-			properties: { ...obstacle, kind: obstacle.kind === 'tree' ? 'tree' : 'block' }
+			...obstacleFeature(obstacle, at, ring)
 		});
 	}
 	for (const row of rows) {
@@ -98,4 +97,28 @@ function signedArea(points: PlanPoint[]): number {
 		const [nextX, nextY] = points[(i + 1) % points.length];
 		return sum + x * nextY - nextX * y;
 	}, 0);
+}
+
+/** Geometry and properties of an obstacle: footprints as polygons, walls as lines, everything else as its middle. */
+function obstacleFeature(
+	obstacle: Obstacle,
+	at: (eastM: number, northM: number) => Position,
+	ring: (points: PlanPoint[], counterClockwise: boolean) => Position[]
+) {
+	switch (obstacle.kind) {
+		case 'building': {
+			const { corners: _corners, ...properties } = obstacle;
+			return { geometry: { type: 'Polygon', coordinates: [ring(buildingRing(obstacle), true)] }, properties };
+		}
+		case 'wall': {
+			const { line: _line, ...properties } = obstacle;
+			const coordinates = wallLine(obstacle).map(([e, n]) => at(e, n));
+			return { geometry: { type: 'LineString', coordinates }, properties };
+		}
+		default:
+			return {
+				geometry: { type: 'Point', coordinates: at(obstacle.eastM, obstacle.northM) },
+				properties: { ...obstacle, kind: obstacle.kind === 'box' ? 'block' : obstacle.kind }
+			};
+	}
 }

@@ -1,4 +1,11 @@
-import type { PlanPoint, Plot } from '../core';
+import {
+	groundHeightM,
+	isMeasured,
+	measuredContours,
+	stretchesOnLand,
+	type PlanPoint,
+	type Plot
+} from '../core';
 import { formatNumber } from '../i18n';
 import { mapStrokes } from './draw-map';
 import type { MapFrame } from './map-scale';
@@ -10,9 +17,60 @@ const OVER_MM = 4;
 /** The level stands this far beyond the contour's end. */
 const LABEL_MM = 2.5;
 
+/** Steps of contours of measured ground, metres; one that gives at most `MOST_LEVELS` of them is taken. */
+const STEPS_M = [0.1, 0.2, 0.25, 0.5, 1, 2, 5, 10, 20, 50, 100];
+const MOST_LEVELS = 14;
+/** Heights are looked at so many times along each side of the window to find its lowest and highest. */
+const LOOKS = 24;
+
+/** Contours of measured ground on the land, each level written once, well inside the window. */
+function drawMeasuredGround(pen: Pen, plot: Plot, map: MapFrame): void {
+	const { minEastM, maxEastM, minNorthM, maxNorthM } = map.shown;
+	let lowest = Infinity;
+	let highest = -Infinity;
+	for (let i = 0; i <= LOOKS; i += 1) {
+		for (let j = 0; j <= LOOKS; j += 1) {
+			const east = minEastM + (i / LOOKS) * (maxEastM - minEastM);
+			const north = minNorthM + (j / LOOKS) * (maxNorthM - minNorthM);
+			const heightM = groundHeightM(plot.ground, east, north);
+			lowest = Math.min(lowest, heightM);
+			highest = Math.max(highest, heightM);
+		}
+	}
+	const stepM = STEPS_M.find((step) => (highest - lowest) / step <= MOST_LEVELS) ?? 200;
+	const box = { westM: minEastM, eastM: maxEastM, southM: minNorthM, northM: maxNorthM };
+	const written = new Map<number, [number, number]>();
+	const { xMm, yMm, widthMm, heightMm } = map.window;
+	for (const piece of measuredContours(plot.ground, stepM, box)) {
+		const stretches = plot.boundary.length
+			? stretchesOnLand(plot.boundary, piece.from, piece.to)
+			: [[piece.from, piece.to]];
+		for (const [from, to] of stretches) {
+			const [p, q] = [map.toPaper(from), map.toPaper(to)];
+			pen.line('ground', p, q, mapStrokes.contour);
+			const inWindow =
+				p[0] > xMm + 16 && p[0] < xMm + widthMm - 7 && p[1] > yMm + 7 && p[1] < yMm + heightMm - 9;
+			// The easternmost spot of each level.
+			const known = written.get(piece.heightM);
+			if (inWindow && (!known || p[0] > known[0])) written.set(piece.heightM, [p[0], p[1]]);
+		}
+	}
+	for (const [level, at] of written) {
+		pen.text('ground', [at[0], at[1] + 0.9], formatNumber(level, stepM < 1 ? 2 : 0), {
+			colour: c.faint,
+			anchor: 'middle',
+			halo: c.white
+		});
+	}
+}
+
 /** Contours of a sloping plot where its land is, each with its level at one end. */
 export function drawGround(pen: Pen, plot: Plot, map: MapFrame): void {
 	const { ground } = plot;
+	if (isMeasured(ground)) {
+		drawMeasuredGround(pen, plot, map);
+		return;
+	}
 	if (ground.kind !== 'plane' || ground.risePercent <= 0) return;
 	const a = (ground.riseTowardsDeg * Math.PI) / 180;
 	const gradient = ground.risePercent / 100;

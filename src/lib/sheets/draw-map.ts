@@ -1,4 +1,4 @@
-import type { Obstacle, PlanPoint, Plot } from '../core';
+import { obstacleExtent, obstacleShape, ridgeLine, type Obstacle, type PlanPoint, type Plot } from '../core';
 import { formatNumber } from '../i18n';
 import type { PegRow } from '../schema/peg-row';
 import type { PaperPoint } from './drawing';
@@ -95,19 +95,20 @@ export function tagHindrances(plot: Plot, map: MapFrame): TagHindrances {
 	const rings = drawnParts(plot, map)
 		.flatMap((part) => [part.outer, ...part.holes])
 		.map((ring) => [...ring, ring[0]].map((p) => map.toPaper(p)));
-	const crowns = plot.obstacles.flatMap((each) => (each.kind === 'tree' ? [crownRing(each, map)] : []));
+	const shapes = plot.obstacles.map(obstacleShape);
+	const crowns = shapes.flatMap((shape) => (shape.kind === 'circle' ? [circleRing(shape, map)] : []));
 	const lines = [...rings, ...setBackChains(plot, map), ...crowns].flatMap((chain) =>
 		chain.slice(1).map((to, i): Segment => [chain[i], to])
 	);
-	const blocks = plot.obstacles.flatMap((each) =>
-		each.kind === 'box' ? [boxCorners(each).map((p) => map.toPaper(p))] : []
+	const blocks = shapes.flatMap((shape) =>
+		shape.kind === 'rings' ? shape.rings.map((ring) => ring.map((p) => map.toPaper(p))) : []
 	);
 	return { lines, blocks };
 }
 
-function crownRing(tree: Extract<Obstacle, { kind: 'tree' }>, map: MapFrame): PaperPoint[] {
-	const [x, y] = map.toPaper([tree.eastM, tree.northM]);
-	const r = tree.crownRadiusM * map.mmPerM;
+function circleRing(circle: { centre: PlanPoint; radiusM: number }, map: MapFrame): PaperPoint[] {
+	const [x, y] = map.toPaper(circle.centre);
+	const r = circle.radiusM * map.mmPerM;
 	return Array.from({ length: 17 }, (_, k): PaperPoint => {
 		const a = (k * Math.PI) / 8;
 		return [x + r * Math.sin(a), y - r * Math.cos(a)];
@@ -168,29 +169,28 @@ export function drawObstacles(pen: Pen, obstacles: Obstacle[], map: MapFrame): v
 			pen.circle('obstacles', centre, Math.max(0.35, obstacle.trunkRadiusM * map.mmPerM), {
 				fill: { colour: c.clear }
 			});
-		} else {
-			pen.polygon('obstacles', [boxCorners(obstacle).map((p) => map.toPaper(p))], {
+			continue;
+		}
+		const shape = obstacleShape(obstacle);
+		if (shape.kind === 'circle') {
+			// A mast is drawn large enough to be found.
+			pen.circle('obstacles', centre, Math.max(0.6, shape.radiusM * map.mmPerM), {
 				fill: { colour: c.obstacleTint },
 				stroke: mapStrokes.box
 			});
+			pen.circle('obstacles', centre, 0.2, { fill: { colour: c.ink } });
+			continue;
 		}
+		const fence = obstacle.kind === 'wall' && obstacle.transmission > 0;
+		for (const ring of shape.rings) {
+			pen.polygon('obstacles', [ring.map((p) => map.toPaper(p))], {
+				...(fence ? {} : { fill: { colour: c.obstacleTint } }),
+				stroke: mapStrokes.box
+			});
+		}
+		const ridge = obstacle.kind === 'building' ? ridgeLine(obstacle) : null;
+		if (ridge) pen.line('obstacles', map.toPaper(ridge[0]), map.toPaper(ridge[1]), mapStrokes.box);
 	}
-}
-
-/** Corners of a block on the ground, metres. */
-export function boxCorners(box: Extract<Obstacle, { kind: 'box' }>): PlanPoint[] {
-	const a = (box.turnDeg * Math.PI) / 180;
-	return (
-		[
-			[-1, -1],
-			[1, -1],
-			[1, 1],
-			[-1, 1]
-		] as const
-	).map(([i, j]) => {
-		const [x, y] = [(i * box.sizeXM) / 2, (j * box.sizeYM) / 2];
-		return [box.eastM + x * Math.cos(a) + y * Math.sin(a), box.northM - x * Math.sin(a) + y * Math.cos(a)];
-	});
 }
 
 /** Reach circle and centre cross of each tracker; those of other sheets only thin and grey. */
@@ -232,12 +232,11 @@ export function drawOrigin(pen: Pen, map: MapFrame): void {
 
 /** Whether any part of an obstacle can show in an extent. */
 export function obstacleShows(obstacle: Obstacle, extent: Extent): boolean {
-	const r =
-		obstacle.kind === 'tree' ? obstacle.crownRadiusM : Math.hypot(obstacle.sizeXM, obstacle.sizeYM) / 2;
+	const [westM, southM, eastM, northM] = obstacleExtent(obstacle);
 	return (
-		obstacle.eastM + r > extent.minEastM &&
-		obstacle.eastM - r < extent.maxEastM &&
-		obstacle.northM + r > extent.minNorthM &&
-		obstacle.northM - r < extent.maxNorthM
+		eastM > extent.minEastM &&
+		westM < extent.maxEastM &&
+		northM > extent.minNorthM &&
+		southM < extent.maxNorthM
 	);
 }

@@ -1,10 +1,20 @@
 import type { Obstacle } from '../core';
 
-/** `T1`, `T2` for trees and `B1` for boxes, in the plot's order: short names for the map, listed with the coordinates. */
+const letters: Record<Obstacle['kind'], string> = {
+	tree: 'T',
+	box: 'B',
+	building: 'B',
+	wall: 'W',
+	mast: 'M'
+};
+
+/** `T1`, `T2` for trees, `B1` for buildings and blocks, `W1`, `M1`, in the plot's order: short names for the map. */
 export function obstacleCodes(obstacles: Obstacle[]): string[] {
-	const counts = { tree: 0, box: 0 };
+	const counts = new Map<string, number>();
 	return obstacles.map(({ kind }) => {
-		counts[kind] += 1;
-		return `${kind === 'tree' ? 'T' : 'B'}${counts[kind]}`;
+		const letter = letters[kind];
+		const number = (counts.get(letter) ?? 0) + 1;
+		counts.set(letter, number);
+		return `${letter}${number}`;
 	});
 }

@@ -1,4 +1,4 @@
-import { treeHeightM, type Obstacle } from '../core';
+import { obstacleTopM, treeHeightM, type Obstacle } from '../core';
 import { formatNumber } from '../i18n';
 import { drawList, LIST_TOP_MM, listTitle, pagesOf, rowsThatFit, type ListColumn } from './list-sheet';
 import { obstacleCodes } from './obstacle-codes';
@@ -54,20 +54,51 @@ function heightsInWords({ heading, plot }: PlanContent): string {
 	return `heights of today; shade computed with ${treesInWords(treeYears)}${only}`;
 }
 
+const kindWords: Record<Obstacle['kind'], string> = {
+	tree: 'tree',
+	box: 'block',
+	building: 'building',
+	wall: 'wall',
+	mast: 'mast'
+};
+
+/** Size of an obstacle in words, metres. */
+function sizeInWords(obstacle: Obstacle): string {
+	switch (obstacle.kind) {
+		case 'tree':
+			return `crown radius ${formatNumber(obstacle.crownRadiusM, 2)}, from ${formatNumber(obstacle.crownBaseM, 2)} up`;
+		case 'box':
+			return `${formatNumber(obstacle.sizeXM, 2)} × ${formatNumber(obstacle.sizeYM, 2)}, turned ${formatNumber(obstacle.turnDeg, 1)}°`;
+		case 'building': {
+			const corners = `${formatNumber(obstacle.corners.length)} corners`;
+			const { roof } = obstacle;
+			return roof.kind === 'flat'
+				? `${corners}, flat roof`
+				: `${corners}, eaves ${formatNumber(obstacle.heightM, 2)}, ridge along ${formatNumber(roof.ridgeDeg, 1)}°`;
+		}
+		case 'wall': {
+			const lengthM = obstacle.line
+				.slice(1)
+				.reduce((sum, [e, n], k) => sum + Math.hypot(e - obstacle.line[k][0], n - obstacle.line[k][1]), 0);
+			const passes =
+				obstacle.transmission > 0 ? `, ${formatNumber(100 * obstacle.transmission)} % passes` : '';
+			return `${formatNumber(lengthM, 2)} long, ${formatNumber(obstacle.thicknessM, 2)} thick${passes}`;
+		}
+		case 'mast':
+			return `radius ${formatNumber(obstacle.radiusM, 2)}`;
+	}
+}
+
 function cells(obstacle: Obstacle, code: string, treeYears: number | null): string[] {
-	const tree = obstacle.kind === 'tree';
-	const computedM = tree ? treeHeightM(obstacle, treeYears ?? 0) : obstacle.heightM;
 	return [
 		code,
-		tree ? 'tree' : 'block',
+		obstacle.kind === 'wall' && obstacle.transmission > 0 ? 'fence' : kindWords[obstacle.kind],
 		obstacle.name,
 		formatNumber(obstacle.eastM, 2),
 		formatNumber(obstacle.northM, 2),
-		formatNumber(obstacle.heightM, 2),
-		...(treeYears === null ? [] : [formatNumber(computedM, 2)]),
-		tree
-			? `crown radius ${formatNumber(obstacle.crownRadiusM, 2)}, from ${formatNumber(obstacle.crownBaseM, 2)} up`
-			: `${formatNumber(obstacle.sizeXM, 2)} × ${formatNumber(obstacle.sizeYM, 2)}, turned ${formatNumber(obstacle.turnDeg, 1)}°`,
-		tree ? formatNumber(obstacle.growthMPerYear, 2) : ''
+		formatNumber(obstacleTopM(obstacle), 2),
+		...(treeYears === null ? [] : [formatNumber(obstacleTopM(obstacle, treeYears), 2)]),
+		sizeInWords(obstacle),
+		obstacle.kind === 'tree' ? formatNumber(obstacle.growthMPerYear, 2) : ''
 	];
 }

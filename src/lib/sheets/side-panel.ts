@@ -1,3 +1,4 @@
+import { isMeasured, type Ground } from '../core';
 import { formatBearing, formatCoordinates, formatNumber } from '../i18n';
 import { planCautions } from './cautions';
 import { mapStrokes } from './draw-map';
@@ -28,6 +29,11 @@ function rule(pen: Pen, panel: PaperRect, y: number): number {
 
 function drawGroundArrow(pen: Pen, content: PlanContent, x: number, y: number): void {
 	const { ground } = content.plot;
+	if (isMeasured(ground)) {
+		pen.text('words', [x + 4, y - 2], 'Ground as', { anchor: 'middle' });
+		pen.text('words', [x + 4, y + 1.4], 'measured', { anchor: 'middle' });
+		return;
+	}
 	if (ground.kind !== 'plane' || ground.risePercent <= 0) {
 		pen.text('words', [x + 4, y - 2], 'Ground taken', { anchor: 'middle' });
 		pen.text('words', [x + 4, y + 1.4], 'as level', { anchor: 'middle' });
@@ -87,8 +93,8 @@ function drawLegend(pen: Pen, content: PlanContent, x: number, y: number, w: num
 			pen.circle('words', [cx, cy], 0.4, { fill: { colour: c.clear } });
 		});
 	}
-	if (kinds.has('box')) {
-		item('B: building, wall or other block', (cx, cy) =>
+	if (kinds.has('box') || kinds.has('building')) {
+		item('B: building or other block', (cx, cy) =>
 			pen.rect(
 				'words',
 				{ xMm: cx - 3, yMm: cy - 1.2, widthMm: 6, heightMm: 2.4 },
@@ -96,7 +102,22 @@ function drawLegend(pen: Pen, content: PlanContent, x: number, y: number, w: num
 			)
 		);
 	}
-	if (content.plot.ground.kind === 'plane') {
+	if (kinds.has('wall')) {
+		item('W: wall, filled, or fence', (cx, cy) =>
+			pen.rect(
+				'words',
+				{ xMm: cx - 4, yMm: cy - 0.4, widthMm: 8, heightMm: 0.8 },
+				{ fill: { colour: c.obstacleTint }, stroke: mapStrokes.box }
+			)
+		);
+	}
+	if (kinds.has('mast')) {
+		item('M: mast or pole', (cx, cy) => {
+			pen.circle('words', [cx, cy], 0.6, { fill: { colour: c.obstacleTint }, stroke: mapStrokes.box });
+			pen.circle('words', [cx, cy], 0.2, { fill: { colour: c.ink } });
+		});
+	}
+	if (content.plot.ground.kind !== 'level') {
 		item('Ground contour with its level', (cx, cy) =>
 			pen.line('words', [cx - 4, cy], [cx + 4, cy], { ...mapStrokes.contour, colour: c.faint })
 		);
@@ -104,14 +125,24 @@ function drawLegend(pen: Pen, content: PlanContent, x: number, y: number, w: num
 	return top;
 }
 
+function groundInWords(ground: Ground): string {
+	switch (ground.kind) {
+		case 'level':
+			return `The ground is taken as level at ${formatNumber(ground.heightM, 2)}.`;
+		case 'plane':
+			return `The ground is a plane through level ${formatNumber(ground.heightM, 2)} at the origin.`;
+		case 'points':
+			return `The ground runs straight between ${formatNumber(ground.points.length)} measured heights.`;
+		case 'raster':
+			return `The ground runs straight between heights on a grid of ${formatNumber(ground.cellM, 2)} m.`;
+	}
+}
+
 function drawCoordinates(pen: Pen, content: PlanContent, x: number, y: number, w: number): number {
 	const { place, plot } = content;
 	let top = heading(pen, x, y, 'Coordinates and levels');
 	const origin = formatCoordinates(place.latitudeDeg, place.longitudeDeg, 7);
-	const rise =
-		plot.ground.kind === 'plane'
-			? `The ground is a plane through level ${formatNumber(plot.ground.heightM, 2)} at the origin.`
-			: `The ground is taken as level at ${formatNumber(plot.ground.heightM, 2)}.`;
+	const rise = groundInWords(plot.ground);
 	for (const sentence of [
 		`Local grid in metres, E east and N north of the origin (small circled cross) at ${origin}, WGS84.`,
 		'Grid north is true north at the origin; distances are on the ground (transverse Mercator about the origin, scale 1). Bearings run clockwise from true north.',

@@ -1,4 +1,4 @@
-import type { PlanPoint } from '../core';
+import { obstacleExtent, type PlanPoint } from '../core';
 import { formatNumber } from '../i18n';
 import type { PegRow } from '../schema/peg-row';
 import {
@@ -81,9 +81,9 @@ function wholeMap(content: PlanContent): MapFrame {
 	// Obstacles that touch the land's extent belong on the sheet; a far one must not shrink everything.
 	for (const obstacle of content.plot.obstacles) {
 		if (!obstacleShows(obstacle, grown(core, 5))) continue;
-		const r =
-			obstacle.kind === 'tree' ? obstacle.crownRadiusM : Math.max(obstacle.sizeXM, obstacle.sizeYM) / 2;
-		if (r < 25) points.push({ at: [obstacle.eastM, obstacle.northM], marginM: r });
+		const [westM, southM, eastM, northM] = obstacleExtent(obstacle);
+		if (Math.max(eastM - westM, northM - southM) >= 50) continue;
+		points.push({ at: [westM, southM], marginM: 0 }, { at: [eastM, northM], marginM: 0 });
 	}
 	return frameFor(extentOf(points) ?? core);
 }

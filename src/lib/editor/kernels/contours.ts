@@ -1,11 +1,27 @@
-import { boundaryEdges, type BoundaryPart, type Ground, type PlanPoint } from '$lib/core';
+import {
+	boundaryEdges,
+	measuredContours,
+	stretchesOnLand,
+	type BoundaryPart,
+	type Ground,
+	type PlanPoint
+} from '$lib/core';
+import { extentOf } from './pick';
 import type { PlanSegment } from './set-back-line';
 
 const mostLines = 200;
 
-/** Contour lines of a sloping plane inside the boundary, every `stepM` of height; none on level ground. */
+/** Contour lines of sloping or measured ground inside the boundary, every `stepM` of height; none on level ground. */
 export function contourLines(ground: Ground, boundary: readonly BoundaryPart[], stepM = 1): PlanSegment[] {
-	if (ground.kind === 'level' || ground.risePercent === 0 || boundary.length === 0) return [];
+	if (ground.kind === 'level' || boundary.length === 0) return [];
+	if (ground.kind !== 'plane') {
+		const box = extentOf(boundary.flatMap((part) => part.outer));
+		if (!box) return [];
+		return measuredContours(ground, stepM, box).flatMap(({ from, to }) =>
+			stretchesOnLand(boundary, from, to)
+		);
+	}
+	if (ground.risePercent === 0) return [];
 	const bearing = (ground.riseTowardsDeg * Math.PI) / 180;
 	const rise: PlanPoint = [Math.sin(bearing), Math.cos(bearing)];
 	const along: PlanPoint = [rise[1], -rise[0]];

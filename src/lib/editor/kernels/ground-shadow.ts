@@ -1,5 +1,11 @@
-import type { Ground, Obstacle, PlanPoint } from '$lib/core';
-import type { Vec3 } from '$lib/core';
+import {
+	groundSurface,
+	obstacleSolids,
+	type Ground,
+	type Obstacle,
+	type PlanPoint,
+	type Vec3
+} from '$lib/core';
 
 /**
  * Shadows on the ground plane, for the eye: where the outline of a table or an obstacle lands along the sunlight. The shade on
@@ -7,21 +13,18 @@ import type { Vec3 } from '$lib/core';
  */
 
 /** Height of the ground as `heightM + eastSlope * east + northSlope * north`. */
-interface GroundPlane {
+export interface GroundPlane {
 	heightM: number;
 	eastSlope: number;
 	northSlope: number;
 }
 
-export function groundPlane(ground: Ground): GroundPlane {
-	if (ground.kind === 'level') return { heightM: ground.heightM, eastSlope: 0, northSlope: 0 };
-	const rise = ground.risePercent / 100;
-	const bearing = (ground.riseTowardsDeg * Math.PI) / 180;
-	return {
-		heightM: ground.heightM,
-		eastSlope: rise * Math.sin(bearing),
-		northSlope: rise * Math.cos(bearing)
-	};
+/** The plane that the ground is, or on measured ground the one it has at a point: near it the two differ little. */
+export function groundPlane(ground: Ground, at: PlanPoint = [0, 0]): GroundPlane {
+	const surface = groundSurface(ground);
+	const [eastSlope, northSlope] = surface.gradient(at[0], at[1]);
+	const heightM = surface.heightM(at[0], at[1]) - eastSlope * at[0] - northSlope * at[1];
+	return { heightM, eastSlope, northSlope };
 }
 
 /**
@@ -67,52 +70,16 @@ export function convexHull(points: readonly PlanPoint[]): PlanPoint[] {
 	return [...half(sorted), ...half(sorted.reverse())];
 }
 
-const roundCorners = 14;
-
-function ring(eastM: number, northM: number, radiusM: number, upM: number): Vec3[] {
-	return Array.from({ length: roundCorners }, (_, i) => {
-		const angle = (2 * Math.PI * i) / roundCorners;
-		return [eastM + radiusM * Math.cos(angle), northM + radiusM * Math.sin(angle), upM];
-	});
-}
-
-/** Plan corners of a box obstacle, turned clockwise about its centre. */
-export function boxCorners(obstacle: Extract<Obstacle, { kind: 'box' }>): PlanPoint[] {
-	const turn = (obstacle.turnDeg * Math.PI) / 180;
-	const cos = Math.cos(turn);
-	const sin = Math.sin(turn);
-	const x = obstacle.sizeXM / 2;
-	const y = obstacle.sizeYM / 2;
-	return [
-		[-x, -y],
-		[x, -y],
-		[x, y],
-		[-x, y]
-	].map(([dx, dy]) => [obstacle.eastM + dx * cos + dy * sin, obstacle.northM - dx * sin + dy * cos]);
-}
-
-/** Convex parts of an obstacle's surface as point sets, standing on ground at `footUpM`. */
-export function obstacleParts(obstacle: Obstacle, footUpM: number): Vec3[][] {
-	const topM = footUpM + obstacle.heightM;
-	if (obstacle.kind === 'box') {
-		const corners = boxCorners(obstacle);
-		return [
-			corners.flatMap(([e, n]): Vec3[] => [
-				[e, n, footUpM],
-				[e, n, topM]
-			])
-		];
-	}
-	const { eastM, northM } = obstacle;
-	const crownM = footUpM + obstacle.crownBaseM;
-	return [
-		[
-			...ring(eastM, northM, obstacle.trunkRadiusM, footUpM),
-			...ring(eastM, northM, obstacle.trunkRadiusM, crownM)
-		],
-		[
-			...ring(eastM, northM, obstacle.crownRadiusM, crownM),
-			...ring(eastM, northM, obstacle.crownRadiusM, topM)
-		]
-	];
+/** Corners of each convex part of an obstacle standing on the ground. */
+export function obstacleParts(obstacle: Obstacle, ground: Ground): Vec3[][] {
+	const surface = groundSurface(ground);
+	// Shape alone is asked for: neither the season nor the years change what is drawn here.
+	const site = { groundAt: (e: number, n: number) => surface.heightM(e, n), treeYears: 0, latitudeDeg: 0 };
+	return obstacleSolids(obstacle, site, 0).map(({ vertices }) =>
+		Array.from({ length: vertices.length / 3 }, (_, k): Vec3 => [
+			vertices[3 * k],
+			vertices[3 * k + 1],
+			vertices[3 * k + 2]
+		])
+	);
 }

@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest';
 import type { DayShade, Layout, PlanPoint, Tracker, TrackerModel } from '$lib/core';
 import { alignPoint } from './align';
 import { minutesToClear } from './clear-time';
-import { boxCorners, castOutline, castPoint, convexHull, groundPlane } from './ground-shadow';
+import { boxRing } from '$lib/core';
+import { castOutline, castPoint, convexHull, groundPlane } from './ground-shadow';
 import {
 	addTrackers,
 	changeModel,
@@ -212,15 +213,11 @@ describe('shadows on the ground', () => {
 	});
 
 	it('turn a box clockwise: its long side along east points south-east after 45 degrees', () => {
-		const corners = boxCorners({
-			id: 'o',
-			kind: 'box',
-			name: 'barn',
+		const corners = boxRing({
 			eastM: 0,
 			northM: 0,
 			sizeXM: 10,
 			sizeYM: 0.001,
-			heightM: 3,
 			turnDeg: 45
 		});
 		const east = corners.reduce((far, corner) => (corner[0] > far[0] ? corner : far));

@@ -1,4 +1,5 @@
-import type { Vec3 } from '$lib/core';
+import type { PlanPoint, Vec3 } from '$lib/core';
+import type { GroundPlane } from './ground-shadow';
 
 /** A table as a rectangle in space: centre, unit axes right and up the slope, size in metres. */
 export interface TableQuad {
@@ -50,11 +51,7 @@ export function pickTable(
 }
 
 /** Where a ray meets the ground `height + eastSlope * east + northSlope * north`; null when it never does. */
-export function rayToGround(
-	origin: Vec3,
-	direction: Vec3,
-	plane: { heightM: number; eastSlope: number; northSlope: number }
-): Vec3 | null {
+export function rayToGround(origin: Vec3, direction: Vec3, plane: GroundPlane): Vec3 | null {
 	const fall = direction[2] - plane.eastSlope * direction[0] - plane.northSlope * direction[1];
 	if (Math.abs(fall) < 1e-9) return null;
 	const above = origin[2] - plane.heightM - plane.eastSlope * origin[0] - plane.northSlope * origin[1];
@@ -65,4 +62,28 @@ export function rayToGround(
 		origin[1] + along * direction[1],
 		origin[2] + along * direction[2]
 	];
+}
+
+const mostTries = 12;
+const nearEnoughM = 0.01;
+
+/**
+ * Where a ray meets uneven ground, from plane to plane: `planeAt` gives the ground's own at a point. It starts from the plane
+ * at `near`, and stops where it came within a centimetre or after a dozen planes, which is near enough for a pointer.
+ */
+export function rayToSurface(
+	origin: Vec3,
+	direction: Vec3,
+	planeAt: (at: PlanPoint) => GroundPlane,
+	near: PlanPoint
+): Vec3 | null {
+	let hit = rayToGround(origin, direction, planeAt(near));
+	for (let tries = 0; tries < mostTries && hit; tries += 1) {
+		const next = rayToGround(origin, direction, planeAt([hit[0], hit[1]]));
+		if (!next) return hit;
+		const moved = Math.hypot(next[0] - hit[0], next[1] - hit[1], next[2] - hit[2]);
+		hit = next;
+		if (moved < nearEnoughM) break;
+	}
+	return hit;
 }

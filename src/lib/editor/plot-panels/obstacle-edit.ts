@@ -1,4 +1,13 @@
-import type { BoxObstacle, Obstacle, PlanPoint, TreeObstacle } from '$lib/core';
+import {
+	obstacleExtent,
+	type BoxObstacle,
+	type BuildingObstacle,
+	type MastObstacle,
+	type Obstacle,
+	type PlanPoint,
+	type TreeObstacle,
+	type WallObstacle
+} from '$lib/core';
 import { toCentimetre } from './boundary-edit';
 
 /** A name that no obstacle has yet: "Tree 2". */
@@ -49,14 +58,91 @@ export function treeHeightIn(tree: TreeObstacle, years: number): number {
 	return Math.max(tree.heightM, Math.min(tree.maxHeightM, tree.heightM + tree.growthMPerYear * years));
 }
 
-/** Half the size of an obstacle in plan, metres: for fitting and hitting. */
-export function planRadiusM(obstacle: Obstacle): number {
-	return obstacle.kind === 'tree' ? obstacle.crownRadiusM : Math.hypot(obstacle.sizeXM, obstacle.sizeYM) / 2;
+/** An upright pole to start from. */
+export function newMast(id: string, point: PlanPoint, obstacles: readonly Obstacle[]): MastObstacle {
+	const [eastM, northM] = toCentimetre(point);
+	return { id, kind: 'mast', name: freshName('Mast', obstacles), eastM, northM, heightM: 9, radiusM: 0.15 };
 }
 
-/** How far an obstacle reaches south of its middle in plan, metres, however it is turned: its name stands below that. */
+/** Corners as offsets from the first of them, to the centimetre. */
+function fromFirst(points: readonly PlanPoint[]): { eastM: number; northM: number; offsets: PlanPoint[] } {
+	const [eastM, northM] = toCentimetre(points[0]);
+	return {
+		eastM,
+		northM,
+		offsets: points.map((point) => toCentimetre([point[0] - eastM, point[1] - northM]))
+	};
+}
+
+/** A building on a footprint of drawn corners, to be given its own height and roof. */
+export function newBuilding(
+	id: string,
+	corners: readonly PlanPoint[],
+	obstacles: readonly Obstacle[]
+): BuildingObstacle {
+	const { eastM, northM, offsets } = fromFirst(corners);
+	const name = freshName('Building', obstacles);
+	return {
+		id,
+		kind: 'building',
+		name,
+		eastM,
+		northM,
+		corners: offsets,
+		heightM: 4,
+		roof: { kind: 'flat' }
+	};
+}
+
+/** A wall along a drawn line, to be given its own sizes. */
+export function newWall(
+	id: string,
+	line: readonly PlanPoint[],
+	obstacles: readonly Obstacle[]
+): WallObstacle {
+	const { eastM, northM, offsets } = fromFirst(line);
+	const name = freshName('Wall', obstacles);
+	return {
+		id,
+		kind: 'wall',
+		name,
+		eastM,
+		northM,
+		line: offsets,
+		heightM: 2,
+		thicknessM: 0.2,
+		transmission: 0
+	};
+}
+
+/** Bearing of the longest side of a footprint, 0..180: a ridge mostly runs along it. */
+export function longestSideDeg(corners: readonly PlanPoint[]): number {
+	let longest = 0;
+	let bearing = 0;
+	corners.forEach((from, k) => {
+		const to = corners[(k + 1) % corners.length];
+		const length = Math.hypot(to[0] - from[0], to[1] - from[1]);
+		if (length <= longest) return;
+		longest = length;
+		bearing = (Math.atan2(to[0] - from[0], to[1] - from[1]) * 180) / Math.PI;
+	});
+	return Math.round((((bearing % 180) + 180) % 180) * 10) / 10;
+}
+
+/** How far an obstacle reaches south of its place in plan, metres: its name stands below that. */
 export function southReachM(obstacle: Obstacle): number {
-	if (obstacle.kind === 'tree') return obstacle.crownRadiusM;
-	const turn = (obstacle.turnDeg * Math.PI) / 180;
-	return (Math.abs(obstacle.sizeXM * Math.sin(turn)) + Math.abs(obstacle.sizeYM * Math.cos(turn))) / 2;
+	return obstacle.northM - obstacleExtent(obstacle)[1];
+}
+
+const kindWords: Record<Obstacle['kind'], string> = {
+	box: 'box',
+	tree: 'tree',
+	building: 'building',
+	wall: 'wall',
+	mast: 'mast'
+};
+
+/** What an obstacle is, in a word. */
+export function kindWord(obstacle: Obstacle): string {
+	return obstacle.kind === 'wall' && obstacle.transmission > 0 ? 'fence' : kindWords[obstacle.kind];
 }

@@ -168,8 +168,8 @@ export class PlanGestures {
 	#click(grab: Grab, at: [number, number]): void {
 		const desk = this.#desk;
 		const ground = toGround(desk.camera, ...at);
-		if (desk.tool === 'draw') this.#draw(ground, at);
-		else if (desk.tool === 'box' || desk.tool === 'tree') desk.place(desk.tool, ground);
+		if (desk.drawing) this.#draw(ground, at);
+		else if (desk.placing) desk.place(desk.placing, ground);
 		else if (grab.kind === 'corner' && !grab.insert) desk.selectCorner(grab.ref);
 		else if (grab.kind === 'corner') {
 			// A click on the middle of an edge sets a corner there.
@@ -181,9 +181,11 @@ export class PlanGestures {
 
 	#draw(ground: PlanPoint, at: [number, number]): void {
 		const desk = this.#desk;
-		if (desk.draft.length >= 3) {
-			const first = toScreen(desk.camera, desk.draft[0]);
-			if (Math.hypot(first[0] - at[0], first[1] - at[1]) <= CLOSE_PX) {
+		if (desk.draft.length >= desk.leastCorners) {
+			// An outline is closed on its first corner, a line is ended on its last.
+			const end = desk.draft[desk.drawing === 'wall' ? desk.draft.length - 1 : 0];
+			const closing = toScreen(desk.camera, end);
+			if (Math.hypot(closing[0] - at[0], closing[1] - at[1]) <= CLOSE_PX) {
 				desk.closeDraft();
 				return;
 			}

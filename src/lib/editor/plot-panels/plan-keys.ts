@@ -16,7 +16,7 @@ export function planKey(desk: PlotDesk, event: KeyboardEvent, margins: Margins):
 }
 
 function act(desk: PlotDesk, event: KeyboardEvent, margins: Margins): boolean {
-	if (desk.tool === 'draw' && drawingKey(desk, event.key)) return true;
+	if (desk.drawing && drawingKey(desk, event.key)) return true;
 	const arrow = arrows[event.key];
 	if (arrow) {
 		const [east, north] = arrow;

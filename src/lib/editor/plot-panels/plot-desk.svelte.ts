@@ -1,5 +1,12 @@
-import type { BoundaryPart, Obstacle, PlanPoint, Plot } from '$lib/core';
-import { MAX_BOUNDARY_CORNERS, MAX_OBSTACLES } from '$lib/schema';
+import { obstacleExtent, type BoundaryPart, type Obstacle, type PlanPoint, type Plot } from '$lib/core';
+import {
+	MAX_BOUNDARY_CORNERS,
+	MAX_FOOTPRINT_CORNERS,
+	MAX_OBSTACLES,
+	MAX_OFFSET_M,
+	MAX_WALL_POINTS,
+	wallLineProblem
+} from '$lib/schema';
 import { ringProblems, ringProblemSentence } from '$lib/schema/plot-checks';
 import { extentOf, type PlanBox } from '../kernels/pick';
 import { fitBox, panBy, zoomAt, type Margins, type PlanCamera } from '../kernels/plan-camera';
@@ -15,9 +22,13 @@ import {
 	turnRings,
 	type CornerRef
 } from './boundary-edit';
-import { newBox, newTree, planRadiusM } from './obstacle-edit';
+import { newBox, newBuilding, newMast, newTree, newWall } from './obstacle-edit';
 
-export type PlotTool = 'select' | 'draw' | 'box' | 'tree';
+/** Tools that place an obstacle with one click. */
+export type PlaceTool = 'box' | 'tree' | 'mast';
+/** Tools that draw corner by corner: the boundary, a footprint, the line of a wall. */
+export type DrawTool = 'draw' | 'building' | 'wall';
+export type PlotTool = 'select' | DrawTool | PlaceTool;
 export type PlotCard = 'boundary' | 'ground' | 'skyline' | 'obstacles' | 'obstacle';
 
 /** Half the side of the ground that an empty plot shows, metres. */
@@ -56,6 +67,21 @@ export class PlotDesk {
 		this.store = store;
 	}
 
+	/** The tool that corners are drawn with, or null. */
+	get drawing(): DrawTool | null {
+		return this.tool === 'draw' || this.tool === 'building' || this.tool === 'wall' ? this.tool : null;
+	}
+
+	/** The tool that places an obstacle with a click, or null. */
+	get placing(): PlaceTool | null {
+		return this.tool === 'box' || this.tool === 'tree' || this.tool === 'mast' ? this.tool : null;
+	}
+
+	/** Fewest corners that what is being drawn can have. */
+	get leastCorners(): number {
+		return this.tool === 'wall' ? 2 : 3;
+	}
+
 	get plot(): Plot {
 		return this.store.plot;
 	}
@@ -67,10 +93,10 @@ export class PlotDesk {
 	choose(tool: PlotTool): void {
 		if (this.readOnly) return;
 		this.message = null;
+		if (tool !== this.tool) this.draft = [];
 		this.tool = tool;
 		this.corner = null;
 		if (tool !== 'select') this.card = null;
-		if (tool !== 'draw') this.draft = [];
 	}
 
 	open(card: PlotCard | null): void {
@@ -123,9 +149,8 @@ export class PlotDesk {
 		const points = parts.flatMap((part) => part.outer);
 		if (extra.length === 0) {
 			for (const obstacle of this.plot.obstacles) {
-				const radius = planRadiusM(obstacle);
-				points.push([obstacle.eastM - radius, obstacle.northM - radius]);
-				points.push([obstacle.eastM + radius, obstacle.northM + radius]);
+				const [west, south, east, north] = obstacleExtent(obstacle);
+				points.push([west, south], [east, north]);
 			}
 			for (const tracker of this.store.layout.trackers) points.push([tracker.eastM, tracker.northM]);
 		}
@@ -139,11 +164,27 @@ export class PlotDesk {
 
 	addDraftCorner(point: PlanPoint): void {
 		this.message = null;
-		if (this.cornerCount + this.draft.length >= MAX_BOUNDARY_CORNERS) {
+		const problem = this.#obstacleDraftProblem(point);
+		if (problem) {
+			this.message = problem;
+			return;
+		}
+		if (this.tool === 'draw' && this.cornerCount + this.draft.length >= MAX_BOUNDARY_CORNERS) {
 			this.message = `A boundary holds at most ${MAX_BOUNDARY_CORNERS} corners: finish this outline with fewer.`;
 			return;
 		}
 		this.draft = [...this.draft, toCentimetre(point)];
+	}
+
+	/** Why a further corner of a footprint or wall can't be set. */
+	#obstacleDraftProblem(point: PlanPoint): string | null {
+		if (this.tool !== 'building' && this.tool !== 'wall') return null;
+		const most = this.tool === 'wall' ? MAX_WALL_POINTS : MAX_FOOTPRINT_CORNERS;
+		if (this.draft.length >= most) return `At most ${most} corners: finish with these.`;
+		const [first] = this.draft;
+		const far =
+			first && Math.max(Math.abs(point[0] - first[0]), Math.abs(point[1] - first[1])) > MAX_OFFSET_M;
+		return far ? `This is more than ${MAX_OFFSET_M} m from the first corner: begin nearer.` : null;
 	}
 
 	dropDraftCorner(): void {
@@ -159,6 +200,24 @@ export class PlotDesk {
 
 	/** Closes the outline; one that can't be land stays open, with the reason. */
 	closeDraft(): void {
+		if (this.tool === 'building') this.#closeBuilding();
+		else if (this.tool === 'wall') this.#closeWall();
+		else this.#closeOutline();
+	}
+
+	#closeBuilding(): void {
+		const [problem] = ringProblems(this.draft);
+		if (problem) this.message = ringProblemSentence(problem, 'The footprint');
+		else this.#add('Draw a building', newBuilding(crypto.randomUUID(), this.draft, this.plot.obstacles));
+	}
+
+	#closeWall(): void {
+		const problem = wallLineProblem(this.draft);
+		if (problem) this.message = problem;
+		else this.#add('Draw a wall', newWall(crypto.randomUUID(), this.draft, this.plot.obstacles));
+	}
+
+	#closeOutline(): void {
 		const [problem] = ringProblems(this.draft);
 		if (problem) {
 			this.message = ringProblemSentence(problem, 'The outline');
@@ -262,19 +321,23 @@ export class PlotDesk {
 		this.corner = null;
 	}
 
-	place(kind: Obstacle['kind'], point: PlanPoint): void {
-		const { obstacles } = this.plot;
-		if (obstacles.length >= MAX_OBSTACLES) {
+	place(kind: PlaceTool, point: PlanPoint): void {
+		const make = { box: newBox, tree: newTree, mast: newMast }[kind];
+		this.#add(`Place a ${kind}`, make(crypto.randomUUID(), point, this.plot.obstacles));
+	}
+
+	#add(label: string, obstacle: Obstacle): void {
+		if (this.plot.obstacles.length >= MAX_OBSTACLES) {
 			this.message = `A plot holds at most ${MAX_OBSTACLES} obstacles: delete one first.`;
 			return;
 		}
-		const id = crypto.randomUUID();
-		const obstacle = kind === 'box' ? newBox(id, point, obstacles) : newTree(id, point, obstacles);
-		this.store.editPlot(kind === 'box' ? 'Place a box' : 'Place a tree', (draft) => {
+		this.store.editPlot(label, (draft) => {
 			draft.obstacles.push(obstacle);
 		});
+		this.draft = [];
+		this.message = null;
 		this.tool = 'select';
-		this.selectObstacle(id);
+		this.selectObstacle(obstacle.id);
 	}
 
 	editObstacle(id: string, label: string, change: Partial<Obstacle>): void {

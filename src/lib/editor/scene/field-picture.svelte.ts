@@ -10,7 +10,7 @@ import {
 	type PlanPoint,
 	type Vec3
 } from '$lib/core';
-import { castOutline, groundPlane, obstacleParts } from '../kernels/ground-shadow';
+import { castOutline, groundPlane, obstacleParts, type GroundPlane } from '../kernels/ground-shadow';
 import type { TableQuad } from '../kernels/ray-pick';
 import { setBackLine } from '../kernels/set-back-line';
 import type { ProjectStore } from '../project-store.svelte';
@@ -48,7 +48,6 @@ export class FieldPicture {
 		this.store = store;
 	}
 
-	readonly plane = $derived.by(() => groundPlane(this.store.plot.ground));
 	readonly sunUp = $derived.by(() => this.store.sun.elevationDeg > leastSunDeg);
 	readonly sunVector = $derived.by(() => sunVector(this.store.sun.azimuthDeg, this.store.sun.elevationDeg));
 
@@ -62,20 +61,24 @@ export class FieldPicture {
 	);
 
 	/** Lit polygons of each table's plane; no polygon at all on a table that is wholly shaded. */
-	readonly litPieces = $derived.by(() => fieldLitPieces(this.store.field, this.store.sun));
+	readonly litPieces = $derived.by(() =>
+		fieldLitPieces(this.store.field, this.store.sun, this.store.dayOfYear)
+	);
 
 	/** Outlines of the tables' shadows on the ground, null where none falls. */
 	readonly tableShadows = $derived.by((): (PlanPoint[] | null)[] =>
 		this.sunUp
-			? this.tables.map((table) => castOutline(tableCorners(table), this.sunVector, this.plane))
+			? this.tables.map((table) =>
+					castOutline(tableCorners(table), this.sunVector, this.planeAt([table.centre[0], table.centre[1]]))
+				)
 			: this.tables.map(() => null)
 	);
 
 	readonly obstacleShadows = $derived.by((): PlanPoint[][] => {
 		if (!this.sunUp) return [];
 		return this.store.plot.obstacles.flatMap((obstacle) =>
-			obstacleParts(obstacle, groundHeightM(this.store.plot.ground, obstacle.eastM, obstacle.northM))
-				.map((part) => castOutline(part, this.sunVector, this.plane))
+			obstacleParts(obstacle, this.store.plot.ground)
+				.map((part) => castOutline(part, this.sunVector, this.planeAt([part[0][0], part[0][1]])))
 				.filter((outline) => outline !== null)
 		);
 	});
@@ -102,6 +105,9 @@ export class FieldPicture {
 	readonly setBackSegments = $derived.by(() =>
 		this.store.plot.boundary.flatMap((part) => setBackLine(part, this.store.plot.setBackM))
 	);
+
+	/** The plane that the ground is near a point. */
+	readonly planeAt = (at: PlanPoint): GroundPlane => groundPlane(this.store.plot.ground, at);
 
 	upM(point: PlanPoint): number {
 		return groundHeightM(this.store.plot.ground, point[0], point[1]);
