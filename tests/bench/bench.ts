@@ -68,23 +68,30 @@ export class Bench {
 		const { warmMs = quick ? 150 : 400, repeats = quick ? 3 : 7, budgetMs = quick ? 1000 : 2000 } = patience;
 		const began = performance.now();
 		let warmed = 0;
-		let onceMs = 0;
+		let once = { usedMs: 0, tookMs: 0 };
+		const run = (calls: number): typeof once => {
+			const usedBefore = processorMs();
+			const clockBefore = performance.now();
+			for (let k = 0; k < calls; k++) work();
+			return {
+				usedMs: (processorMs() - usedBefore) / calls,
+				tookMs: (performance.now() - clockBefore) / calls
+			};
+		};
 		while (performance.now() - began < warmMs) {
-			const before = performance.now();
-			work();
-			onceMs = performance.now() - before;
+			once = run(1);
 			warmed++;
 		}
-		const calls = warmed === 0 ? 1 : Math.max(1, Math.ceil(SHORTEST_SAMPLE_MS / Math.max(onceMs, 1e-3)));
+		// Work that takes longer than all the time there is warms itself, and is its own sample.
+		if (once.tookMs > budgetMs) return { processorMs: once.usedMs, clockMs: once.tookMs, repeats: 1 };
+		const calls = warmed === 0 ? 1 : Math.max(1, Math.ceil(SHORTEST_SAMPLE_MS / Math.max(once.tookMs, 1e-3)));
 		const used: number[] = [];
 		const clock: number[] = [];
 		const start = performance.now();
 		do {
-			const usedBefore = processorMs();
-			const clockBefore = performance.now();
-			for (let k = 0; k < calls; k++) work();
-			clock.push((performance.now() - clockBefore) / calls);
-			used.push((processorMs() - usedBefore) / calls);
+			const { usedMs, tookMs } = run(calls);
+			used.push(usedMs);
+			clock.push(tookMs);
 		} while (used.length < repeats && performance.now() - start < budgetMs);
 		return { processorMs: median(used), clockMs: median(clock), repeats: used.length };
 	}

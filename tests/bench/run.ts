@@ -17,7 +17,7 @@ const PARTS: [effects: string[], part: (bench: Bench) => void | Promise<void>][]
 	[['mounts.', 'mountsUnlike.'], mountFigures],
 	[['sky.', 'skyUnlike.', 'energy.'], energyFigures],
 	[['fill.', 'checks.'], layoutFigures],
-	[['memory.'], memoryFigures],
+	[['memory.', 'year.regular.'], memoryFigures],
 	[['raysMesh', 'raysEmbree', 'unionPolygons.'], otherFigures]
 ];
 

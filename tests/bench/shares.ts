@@ -6,8 +6,8 @@ import { everySun } from './suns';
 export const COUNTS = [10, 100, 1000, 10000] as const;
 
 /** Every k-th sun of the year, so that one repeat of the largest fields stays near a second. */
-const ALIKE_EVERY = { 10: 1, 100: 1, 1000: 1, 10000: 7 } as const;
-const UNLIKE_EVERY = { 10: 1, 100: 3, 1000: 19, 10000: 197 } as const;
+const ALIKE_EVERY = { 10: 1, 100: 1, 1000: 1, 10000: 13 } as const;
+const UNLIKE_EVERY = { 10: 1, 100: 3, 1000: 29, 10000: 397 } as const;
 /** Quick runs take this many times fewer suns. */
 const QUICK_FEWER = 11;
 

@@ -7,7 +7,7 @@ import { PART_RUNS, type PartRun, type PartRunName, type PartTask } from './part
 
 const THREADS = 2;
 const MOST_REPEATS = 5;
-const BUDGET_MS = 8000;
+const BUDGET_MS = 6000;
 
 async function inThread(worker: Worker, task: PartTask): Promise<unknown> {
 	worker.postMessage(task);

@@ -1,11 +1,14 @@
-import { difference, type MultiPoly, type Ring } from 'polyclip-ts';
+import { difference } from 'polyclip-ts';
 import type { Bench } from './bench';
 import { coreTiming, Errors, LEAST_ASKED_COSINE, type posedScenes } from './posed';
+
+type MultiPoly = ReturnType<typeof difference>;
+type Ring = MultiPoly[number][number];
 
 function ringArea(ring: Ring): number {
 	let twice = 0;
 	for (let k = 0; k + 1 < ring.length; k++) {
-		twice += Number(ring[k][0]) * Number(ring[k + 1][1]) - Number(ring[k + 1][0]) * Number(ring[k][1]);
+		twice += ring[k][0] * Number(ring[k + 1][1]) - Number(ring[k + 1][0]) * Number(ring[k][1]);
 	}
 	return Math.abs(twice) / 2;
 }
