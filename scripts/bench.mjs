@@ -5,6 +5,7 @@
 //   npm run bench -- --record          writes tests/bench/recorded.json as well
 //   npm run bench -- --forget          leaves .data/bench.json, the last run on this machine, as it is
 // Each figure is shown beside the last run on this machine and beside the recorded one.
+import { rmSync } from 'node:fs';
 import { mkdir, mkdtemp, readFile, rm, writeFile } from 'node:fs/promises';
 import { availableParallelism, cpus, totalmem } from 'node:os';
 import { fileURLToPath, pathToFileURL } from 'node:url';
@@ -46,6 +47,12 @@ async function figuresOf(file) {
 const began = performance.now();
 await mkdir(dataDir, { recursive: true });
 const folder = await mkdtemp(`${dataDir}/bench-`);
+for (const signal of ['SIGINT', 'SIGTERM']) {
+	process.once(signal, () => {
+		rmSync(folder, { recursive: true, force: true });
+		process.exit(1);
+	});
+}
 try {
 	const last = await figuresOf(lastFile);
 	const recorded = await figuresOf(recordedFile);

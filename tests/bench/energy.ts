@@ -23,7 +23,7 @@ function skyFigure(bench: Bench, name: string, input: RunInput): void {
 export async function energyFigures(bench: Bench): Promise<void> {
 	skyFigure(bench, 'sky.regular.1000.ms', alikeField('regular', 1000));
 	skyFigure(bench, 'skyUnlike.sloped.1000.ms', unlikeField('sloped', 1000));
-	await threadFigures(bench, 'energy', 'energy.regular.100', withEnergy(alikeField('regular', 100)));
 	if (bench.options.quick) return;
+	await threadFigures(bench, 'energy', 'energy.regular.100', withEnergy(alikeField('regular', 100)));
 	await threadFigures(bench, 'energy', 'energy.regular.1000', withEnergy(alikeField('regular', 1000)));
 }

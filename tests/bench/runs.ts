@@ -25,7 +25,7 @@ const yearOf =
 		void shadeYear(input);
 
 export function yearFigures(bench: Bench): void {
-	for (const field of FIELDS)
+	for (const field of bench.options.quick ? (['regular'] as const) : FIELDS)
 		bench.milliseconds(`year.${field}.1000.ms`, yearOf(alikeField(field, 1000)), RUNS);
 	if (!bench.options.quick) {
 		bench.milliseconds('yearUnlike.sloped.1000.ms', yearOf(unlikeField('sloped', 1000)), RUNS);

@@ -8,7 +8,7 @@ type Ring = MultiPoly[number][number];
 function ringArea(ring: Ring): number {
 	let twice = 0;
 	for (let k = 0; k + 1 < ring.length; k++) {
-		twice += ring[k][0] * Number(ring[k + 1][1]) - Number(ring[k + 1][0]) * Number(ring[k][1]);
+		twice += ring[k][0] * ring[k + 1][1] - ring[k + 1][0] * ring[k][1];
 	}
 	return Math.abs(twice) / 2;
 }
