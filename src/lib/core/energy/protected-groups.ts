@@ -34,12 +34,9 @@ export class ProtectedGroups {
 	private readonly stringOf: Int32Array;
 	private readonly stringMarks: Int32Array;
 	private mark = 0;
-	/** Ranges of a first lone rectangle, kept unmarked while nothing else comes. */
-	private lone = false;
-	private c0 = 0;
-	private c1 = -1;
-	private r0 = 0;
-	private r1 = -1;
+	/** Ranges [c0, c1, r0, r1] of up to two rectangles, kept unmarked while no third one comes: two need no marks. */
+	private readonly held = new Int32Array(8);
+	private heldCount = 0;
 
 	constructor(
 		model: Pick<
@@ -89,14 +86,21 @@ export class ProtectedGroups {
 	clear(): void {
 		this.mark++;
 		this.shaded = 0;
-		this.lone = false;
-		this.c0 = 0;
-		this.c1 = -1;
+		this.heldCount = 0;
 	}
 
 	/** A convex shadow in table coordinates with m corners, as `ShadeEngine.shadowsAhead` hands it over. */
 	add(shadow: Float64Array, m: number): void {
 		if (this.shaded === this.count) return;
+		if (m === 4 && isUpright(shadow)) {
+			const xa = shadow[0];
+			const ya = shadow[1];
+			const xc = shadow[4];
+			const yc = shadow[5];
+			// Opposite corners are the first and the third.
+			this.addRect(Math.min(xa, xc), Math.max(xa, xc), Math.min(ya, yc), Math.max(ya, yc));
+			return;
+		}
 		let west = Infinity;
 		let east = -Infinity;
 		let south = Infinity;
@@ -108,10 +112,6 @@ export class ProtectedGroups {
 			if (x > east) east = x;
 			if (y < south) south = y;
 			if (y > north) north = y;
-		}
-		if (m === 4 && isUpright(shadow)) {
-			this.addRect(west, east, south, north);
-			return;
 		}
 		this.settle();
 		const first = this.rowFrom(south);
@@ -166,25 +166,40 @@ export class ProtectedGroups {
 		const r0 = this.rowFrom(south);
 		const r1 = this.rowTo(north);
 		if (c0 > c1 || r0 > r1) return;
-		if (this.shaded === 0) {
-			this.lone = true;
-			this.c0 = c0;
-			this.c1 = c1;
-			this.r0 = r0;
-			this.r1 = r1;
-			this.shaded = (c1 - c0 + 1) * (r1 - r0 + 1);
+		const { held } = this;
+		if (this.heldCount === 0 && this.shaded > 0) {
+			this.markRange(c0, c1, r0, r1);
 			return;
 		}
-		if (this.lone && c0 >= this.c0 && c1 <= this.c1 && r0 >= this.r0 && r1 <= this.r1) return;
-		this.settle();
-		this.markRange(c0, c1, r0, r1);
+		for (let o = 0; o < 4 * this.heldCount; o += 4) {
+			if (c0 >= held[o] && c1 <= held[o + 1] && r0 >= held[o + 2] && r1 <= held[o + 3]) return;
+		}
+		if (this.heldCount === 2) {
+			this.settle();
+			this.markRange(c0, c1, r0, r1);
+			return;
+		}
+		const o = 4 * this.heldCount++;
+		held[o] = c0;
+		held[o + 1] = c1;
+		held[o + 2] = r0;
+		held[o + 3] = r1;
+		this.shaded += (c1 - c0 + 1) * (r1 - r0 + 1);
+		if (this.heldCount === 1) return;
+		const columns = Math.min(held[1], c1) - Math.max(held[0], c0) + 1;
+		const rows = Math.min(held[3], r1) - Math.max(held[2], r0) + 1;
+		if (columns > 0 && rows > 0) this.shaded -= columns * rows;
 	}
 
+	/** Marks what was held. */
 	private settle(): void {
-		if (!this.lone) return;
-		this.lone = false;
+		const { held, heldCount } = this;
+		if (heldCount === 0) return;
+		this.heldCount = 0;
 		this.shaded = 0;
-		this.markRange(this.c0, this.c1, this.r0, this.r1);
+		for (let o = 0; o < 4 * heldCount; o += 4) {
+			this.markRange(held[o], held[o + 1], held[o + 2], held[o + 3]);
+		}
 	}
 
 	private markRange(c0: number, c1: number, r0: number, r1: number): void {
