@@ -1,10 +1,11 @@
 import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
 import { defineConfig } from 'vitest/config';
+import { measuredChecks } from './scripts/measured-checks-plugin.js';
 import { workerSource } from './scripts/worker-source-plugin.js';
 
 export default defineConfig({
-	plugins: [workerSource(), tailwindcss(), sveltekit()],
+	plugins: [workerSource(), measuredChecks(), tailwindcss(), sveltekit()],
 	test: {
 		environment: 'node',
 		include: ['src/**/*.test.ts', 'tests/**/*.test.ts'],

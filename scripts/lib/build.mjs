@@ -6,7 +6,18 @@ import { root } from './paths.mjs';
 import { Refusal, say, secondsSince } from './say.mjs';
 
 /** What the build is made from. */
-const sources = ['src', 'static', 'package-lock.json', 'svelte.config.js', 'vite.config.ts', 'tsconfig.json'];
+const sources = [
+	'src',
+	'static',
+	'package-lock.json',
+	'svelte.config.js',
+	'vite.config.ts',
+	'tsconfig.json',
+	'scripts/measured-checks-plugin.js',
+	'scripts/worker-source-plugin.js',
+	// Reference values that the build measures the core against.
+	'tests/fixtures'
+];
 const stamp = join(root, 'build', '.source-hash');
 
 /** @returns {string[]} */

@@ -11,7 +11,7 @@ export const placeEffects = [
 			'WGS84; zones of TM 8358.2 (from memory)'
 		],
 		neglected: [
-			{ what: 'Scale of the plan away from its place', howBig: '1.2e-8 at 1 km, 5e-6 at 20 km' },
+			{ what: 'Scale of the plan away from its place', howBig: '1.2 × 10⁻⁸ at 1 km, 5 × 10⁻⁶ at 20 km' },
 			{ what: 'Seventh power of n', howBig: 'some nanometres' }
 		]
 	}

@@ -11,7 +11,7 @@ export const sunEffects = [
 			'Nutation: Meeus, chapter 22, the short form'
 		],
 		neglected: [
-			{ what: 'Terms of the series below 1e-6 radian', howBig: 'together less than 2 arcsec, 0.0006°' },
+			{ what: 'Terms of the series below 10⁻⁶ radian', howBig: 'together less than 2 arcsec, 0.0006°' },
 			{ what: 'UT1 is taken as UTC', howBig: 'at most 0.9 s of time, 0.004°' },
 			{ what: 'Height of the place above the sea', howBig: 'less than 0.000002°' }
 		]
