@@ -1,5 +1,6 @@
 import {
 	groundSurface,
+	isMeasured,
 	obstacleSolids,
 	type Ground,
 	type Obstacle,
@@ -27,6 +28,13 @@ export function groundPlane(ground: Ground, at: PlanPoint = [0, 0]): GroundPlane
 	return { heightM, eastSlope, northSlope };
 }
 
+/** The planes of a ground by place; one and the same for a ground that is a plane. */
+export function groundPlanes(ground: Ground): (at: PlanPoint) => GroundPlane {
+	if (isMeasured(ground)) return (at) => groundPlane(ground, at);
+	const plane = groundPlane(ground);
+	return () => plane;
+}
+
 /**
  * Where a point lands on the ground along the sunlight. `sun` points to the sun. Null when light and ground run alike or the
  * shadow would be longer than `longestM`.
@@ -40,11 +48,35 @@ export function castPoint(point: Vec3, sun: Vec3, plane: GroundPlane, longestM =
 	return [point[0] - along * sun[0], point[1] - along * sun[1], point[2] - along * sun[2]];
 }
 
-/** Shadow outline of a set of points; null when it can't be drawn. */
-export function castOutline(points: readonly Vec3[], sun: Vec3, plane: GroundPlane): PlanPoint[] | null {
+const mostPlanes = 5;
+const nearEnoughM = 0.02;
+
+/** Where a point lands on uneven ground: from the plane under it to the plane where it lands, until the two agree. */
+function castOnto(point: Vec3, sun: Vec3, planeAt: (at: PlanPoint) => GroundPlane): Vec3 | null {
+	let plane = planeAt([point[0], point[1]]);
+	let landed = castPoint(point, sun, plane);
+	for (let tries = 1; tries < mostPlanes && landed; tries += 1) {
+		const next = planeAt([landed[0], landed[1]]);
+		if (next === plane) return landed;
+		plane = next;
+		const again = castPoint(point, sun, plane);
+		if (!again) return landed;
+		const moved = Math.hypot(again[0] - landed[0], again[1] - landed[1]);
+		landed = again;
+		if (moved < nearEnoughM) break;
+	}
+	return landed;
+}
+
+/** Shadow outline of a set of points on the ground that `planeAt` gives near a point; null when it can't be drawn. */
+export function castOutline(
+	points: readonly Vec3[],
+	sun: Vec3,
+	planeAt: (at: PlanPoint) => GroundPlane
+): PlanPoint[] | null {
 	const cast: PlanPoint[] = [];
 	for (const point of points) {
-		const landed = castPoint(point, sun, plane);
+		const landed = castOnto(point, sun, planeAt);
 		if (!landed) return null;
 		cast.push([landed[0], landed[1]]);
 	}

@@ -3,7 +3,7 @@ import type { DayShade, Layout, PlanPoint, Tracker, TrackerModel } from '$lib/co
 import { alignPoint } from './align';
 import { minutesToClear } from './clear-time';
 import { boxRing } from '$lib/core';
-import { castOutline, castPoint, convexHull, groundPlane } from './ground-shadow';
+import { castOutline, castPoint, convexHull, groundPlane, groundPlanes } from './ground-shadow';
 import {
 	addTrackers,
 	changeModel,
@@ -198,7 +198,22 @@ describe('shadows on the ground', () => {
 
 	it('fall nowhere when the sun is down', () => {
 		expect(castPoint([0, 0, 1], [0, -1, 0], level)).toBeNull();
-		expect(castOutline([[0, 0, 1]], [0, -1, -0.1], level)).toBeNull();
+		expect(castOutline([[0, 0, 1]], [0, -1, -0.1], () => level)).toBeNull();
+	});
+
+	it('end where the ground bends up to meet them', () => {
+		// Level up to 10 m north, from there rising 1 in 1: the shadow of a 20 m tip at 45 degrees lands at 15 m, 5 m up.
+		const bank = groundPlanes({
+			kind: 'points',
+			points: [-50, 50].flatMap((e): [number, number, number][] => [
+				[e, -50, 0],
+				[e, 10, 0],
+				[e, 60, 50]
+			])
+		});
+		const [tip] = castOutline([[0, 0, 20]], [0, -half, half], bank)!;
+		expect(tip[0]).toBeCloseTo(0, 6);
+		expect(tip[1]).toBeCloseTo(15, 6);
 	});
 
 	it('have a convex outline', () => {

@@ -1,5 +1,4 @@
 import {
-	obstacleExtent,
 	type BoxObstacle,
 	type BuildingObstacle,
 	type MastObstacle,
@@ -127,11 +126,6 @@ export function longestSideDeg(corners: readonly PlanPoint[]): number {
 		bearing = (Math.atan2(to[0] - from[0], to[1] - from[1]) * 180) / Math.PI;
 	});
 	return Math.round((((bearing % 180) + 180) % 180) * 10) / 10;
-}
-
-/** How far an obstacle reaches south of its place in plan, metres: its name stands below that. */
-export function southReachM(obstacle: Obstacle): number {
-	return obstacle.northM - obstacleExtent(obstacle)[1];
 }
 
 const kindWords: Record<Obstacle['kind'], string> = {

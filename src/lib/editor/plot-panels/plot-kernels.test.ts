@@ -1,6 +1,17 @@
 import { describe, expect, it } from 'vitest';
-import { groundHeightM, longestDate, shortestDate, sunDay, type Ground, type Plot } from '$lib/core';
-import { emptyPlot } from '$lib/schema';
+import {
+	buildingRing,
+	groundHeightM,
+	longestDate,
+	shortestDate,
+	sunDay,
+	wallLine,
+	type Ground,
+	type Obstacle,
+	type PlanPoint,
+	type Plot
+} from '$lib/core';
+import { emptyPlot, obstacleSchema, plotSchema } from '$lib/schema';
 import {
 	boundaryProblem,
 	insertCorner,
@@ -10,7 +21,17 @@ import {
 	turnRings
 } from './boundary-edit';
 import { contoursOf, groundRange } from './contours';
-import { newBox, newTree, southReachM, treeHeightIn } from './obstacle-edit';
+import {
+	kindWord,
+	longestSideDeg,
+	newBox,
+	newBuilding,
+	newMast,
+	newTree,
+	newWall,
+	treeHeightIn
+} from './obstacle-edit';
+import { choiceRows, numberRows } from './obstacle-rows';
 import { widestRadiusM } from './room-inside';
 import { sunPath } from './sun-paths';
 
@@ -134,12 +155,61 @@ describe('obstacles', () => {
 		expect(treeHeightIn(tree, 30)).toBe(14);
 	});
 
-	it('reach as far south as their turned corners', () => {
-		const box = { ...newBox('a', [0, 0], []), sizeXM: 10, sizeYM: 6 };
-		expect(southReachM(box)).toBeCloseTo(3, 9);
-		expect(southReachM({ ...box, turnDeg: 90 })).toBeCloseTo(5, 9);
-		// (10 + 6) / 2 times the sine of 45 degrees.
-		expect(southReachM({ ...box, turnDeg: -45 })).toBeCloseTo(8 * Math.SQRT1_2, 9);
+	it('drawn corner by corner keep their place on the plan, to the centimetre', () => {
+		const corners: PlanPoint[] = [
+			[10.004, 20],
+			[22, 21],
+			[21, 27.5]
+		];
+		const barn = newBuilding('b', corners, []);
+		expect(buildingRing(barn)).toEqual([
+			[10, 20],
+			[22, 21],
+			[21, 27.5]
+		]);
+		expect(barn.name).toBe('Building 1');
+		const wall = newWall('w', corners, [barn]);
+		expect(wallLine(wall)[2]).toEqual([21, 27.5]);
+		expect(kindWord(wall)).toBe('wall');
+		expect(kindWord({ ...wall, transmission: 0.4 })).toBe('fence');
+		const plot = { ...emptyPlot(), obstacles: [barn, wall, newMast('m', [1, 2], [])] };
+		expect(plotSchema.parse(plot)).toEqual(plot);
+		// The side that closes it is the longest: 11 east, 7.5 north.
+		expect(longestSideDeg(barn.corners)).toBeCloseTo((Math.atan2(11, 7.5) * 180) / Math.PI, 1);
+	});
+
+	it('offer exactly the numbers and choices that their schema takes', () => {
+		const building = newBuilding('b', [[0, 0], [9, 0], [9, 5]], []); // prettier-ignore
+		const pitched = { ...building, ...choiceRows(building)[0].change('pitched') };
+		const tree = newTree('t', [0, 0], []);
+		const sheds = {
+			...tree,
+			...choiceRows(tree)[1].change('sheds'),
+			...choiceRows(tree)[0].change('ellipsoid')
+		};
+		const wall = newWall('w', [[0, 0], [9, 0]], []); // prettier-ignore
+		for (const obstacle of [
+			building,
+			pitched,
+			tree,
+			sheds,
+			wall,
+			newMast('m', [0, 0], []),
+			newBox('x', [0, 0], [])
+		]) {
+			const one = obstacle as Obstacle;
+			expect(obstacleSchema.safeParse(one).success).toBe(true);
+			for (const row of numberRows(one)) {
+				expect(row.value).toBeGreaterThanOrEqual(row.min);
+				for (const value of [row.min, row.max]) {
+					const read = obstacleSchema.safeParse({ ...one, ...row.change(value) });
+					expect(read.success, `${one.kind} ${row.key} ${value}`).toBe(true);
+				}
+			}
+		}
+		// Going back from leaves to none keeps the light that it had in leaf.
+		const back = { ...sheds, ...choiceRows(sheds as Obstacle)[1].change('all-year') };
+		expect(obstacleSchema.parse(back)).toMatchObject({ crownTransmission: tree.crownTransmission });
 	});
 });
 

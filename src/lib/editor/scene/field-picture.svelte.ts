@@ -10,7 +10,7 @@ import {
 	type PlanPoint,
 	type Vec3
 } from '$lib/core';
-import { castOutline, groundPlane, obstacleParts, type GroundPlane } from '../kernels/ground-shadow';
+import { castOutline, groundPlanes, obstacleParts } from '../kernels/ground-shadow';
 import type { TableQuad } from '../kernels/ray-pick';
 import { setBackLine } from '../kernels/set-back-line';
 import type { ProjectStore } from '../project-store.svelte';
@@ -68,9 +68,7 @@ export class FieldPicture {
 	/** Outlines of the tables' shadows on the ground, null where none falls. */
 	readonly tableShadows = $derived.by((): (PlanPoint[] | null)[] =>
 		this.sunUp
-			? this.tables.map((table) =>
-					castOutline(tableCorners(table), this.sunVector, this.planeAt([table.centre[0], table.centre[1]]))
-				)
+			? this.tables.map((table) => castOutline(tableCorners(table), this.sunVector, this.planeAt))
 			: this.tables.map(() => null)
 	);
 
@@ -78,7 +76,7 @@ export class FieldPicture {
 		if (!this.sunUp) return [];
 		return this.store.plot.obstacles.flatMap((obstacle) =>
 			obstacleParts(obstacle, this.store.plot.ground)
-				.map((part) => castOutline(part, this.sunVector, this.planeAt([part[0][0], part[0][1]])))
+				.map((part) => castOutline(part, this.sunVector, this.planeAt))
 				.filter((outline) => outline !== null)
 		);
 	});
@@ -107,7 +105,7 @@ export class FieldPicture {
 	);
 
 	/** The plane that the ground is near a point. */
-	readonly planeAt = (at: PlanPoint): GroundPlane => groundPlane(this.store.plot.ground, at);
+	readonly planeAt = $derived.by(() => groundPlanes(this.store.plot.ground));
 
 	upM(point: PlanPoint): number {
 		return groundHeightM(this.store.plot.ground, point[0], point[1]);
