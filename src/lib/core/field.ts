@@ -42,6 +42,7 @@ export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
 		steelHalfWidth: model.widthM / 2 + model.frameMarginM,
 		steelHalfHeight: model.heightM / 2 + model.frameMarginM,
 		halfGap: Math.max(0, Math.min(model.centreGapM, model.widthM)) / 2,
+		offsetReach: Math.abs(model.tiltAxisOffsetM) + Math.hypot(model.tableOffsetM, model.centreShiftM),
 		poseAt(azimuthDeg, elevationDeg) {
 			if (still) return still;
 			sun.azimuthDeg = azimuthDeg;
@@ -145,7 +146,7 @@ export function fieldShade(field: Field, sun: SunDirection, dayOfYear?: number):
 	const shares = new Float64Array(engine.count);
 	if (fieldSunHidden(field, sun)) return shares.fill(1);
 	engine.setSun(sun.azimuthDeg, sun.elevationDeg);
-	for (let i = 0; i < engine.count; i++) shares[i] = engine.share(i);
+	engine.shares(shares);
 	return shares;
 }
 

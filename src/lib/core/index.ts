@@ -48,6 +48,8 @@ export * from './energy/tracking-gain';
 export * from './run/day-shade';
 export * from './run/winter';
 export * from './run/shade-year';
+export { shadeSums, type FieldSums } from './run/shade-sums';
+export { sunTable, type SunTable, type TableSun } from './run/sun-table';
 export * from './run/field-loss';
 export * from './answers';
 export * from './mount/mount-scene';

@@ -77,6 +77,7 @@ export function fixedGroup(
 		steelHalfWidth: table.widthM / 2,
 		steelHalfHeight: table.heightM / 2,
 		halfGap: 0,
+		offsetReach: 0,
 		poseAt: () => fixed
 	};
 }

@@ -1,7 +1,9 @@
 import { RADIANS_PER_DEGREE, tableAxes } from '../conventions';
+import { AlikeView } from './alike-view';
 import { hullOrder } from './hull';
 import { LitPieces, flatArea } from './pieces';
 import { RectUnion } from './rect-union';
+import { TIERS, type SectorLists } from './sector-lists';
 import { passesOn, type Solid } from './solid';
 import { ViewGrid } from './view-grid';
 
@@ -15,6 +17,8 @@ export interface TableGroup {
 	steelHalfHeight: number;
 	/** Half of the clear slot in the middle; 0 is none. */
 	halfGap: number;
+	/** The middle of the glass is never farther than this from the fixed point, metres. */
+	offsetReach: number;
 	/** Pose at a sun: bearing, tilt and the way from the fixed point of a table to its middle. */
 	poseAt(azimuthDeg: number, elevationDeg: number): AimedPose;
 }
@@ -39,7 +43,7 @@ const LEAST_SHADOW_M2 = 1e-13;
 const MOST_SHADOW_CORNERS = 256;
 
 /** Where one group's tables point at the present sun. */
-class GroupPose {
+export class GroupPose {
 	aim: AimedPose | null = null;
 	azimuthDeg = 0;
 	tiltDeg = 0;
@@ -61,6 +65,22 @@ class GroupPose {
 	viewY = 0;
 	extentX = 0;
 	extentY = 0;
+	private readonly packed = new Float64Array(9);
+
+	/** U, V and n side by side. */
+	axes(): Float64Array {
+		const { packed, n } = this;
+		packed[0] = this.ux;
+		packed[1] = this.uy;
+		packed[2] = this.uz;
+		packed[3] = this.vx;
+		packed[4] = this.vy;
+		packed[5] = this.vz;
+		packed[6] = n[0];
+		packed[7] = n[1];
+		packed[8] = n[2];
+		return packed;
+	}
 }
 
 /**
@@ -78,6 +98,9 @@ export class ShadeEngine {
 	private readonly viewX: Float64Array;
 	private readonly viewY: Float64Array;
 	private readonly grid = new ViewGrid();
+	/** All tables are of one kind and nothing else throws shade: the quick way for the whole field. */
+	private readonly alikeOnly: boolean;
+	private readonly view: AlikeView;
 	private readonly rects = new RectUnion();
 	private readonly pieces = new LitPieces();
 	private readonly shadow = new Float64Array(2 * MOST_SHADOW_CORNERS);
@@ -85,6 +108,9 @@ export class ShadeEngine {
 	private readonly hullX = new Float64Array(MOST_SHADOW_CORNERS);
 	private readonly hullY = new Float64Array(MOST_SHADOW_CORNERS);
 	private readonly hullIndex = new Int32Array(2 * MOST_SHADOW_CORNERS);
+	/** Neighbours by sector of azimuth, while a run goes through one. */
+	private lists: SectorLists | null = null;
+	private tier = 0;
 	private near = new Int32Array(64);
 	private nearCount = 0;
 	private readonly nearSolids: Int32Array;
@@ -132,6 +158,9 @@ export class ShadeEngine {
 		this.solidBoxes = new Float64Array(4 * solids.length);
 		this.outlines = solids.map(() => null);
 		this.nearSolids = new Int32Array(solids.length);
+		this.alikeOnly =
+			groups.length === 1 && groups[0].halfGap === 0 && solids.length === 0 && horizons === null;
+		this.view = new AlikeView(this, groups[0]);
 		this.solidPasses = Float64Array.from(this.solids, (solid) => solid.passes);
 		this.seasonal = this.solids.some((solid) => solid.leafPasses !== undefined);
 	}
@@ -150,14 +179,26 @@ export class ShadeEngine {
 		this.setLight(azimuthDeg, elevationDeg, azimuthDeg, elevationDeg, indexed);
 	}
 
+	/**
+	 * Turns everything to light `k` (from the first) of the sector that `lists` were made for: neighbours come from the
+	 * lists. Only tables that the lists hold may be asked about.
+	 */
+	setSunOfSector(azimuthDeg: number, elevationDeg: number, lists: SectorLists, k: number): void {
+		this.setLight(azimuthDeg, elevationDeg, azimuthDeg, elevationDeg, null);
+		this.lists = lists;
+		this.tier = lists.tierOf[k];
+	}
+
 	/** Tables stand as for a sun while the light comes from elsewhere: a piece of the sky. Degrees. */
 	setLight(
 		azimuthDeg: number,
 		elevationDeg: number,
 		lightAzimuthDeg: number,
 		lightElevationDeg: number,
-		indexed = true
+		/** Null when neighbours will come from lists. */
+		indexed: boolean | null = true
 	): void {
+		this.lists = null;
 		this.lightAzimuthDeg = lightAzimuthDeg;
 		this.lightElevationDeg = lightElevationDeg;
 		const a = lightAzimuthDeg * RADIANS_PER_DEGREE;
@@ -216,7 +257,7 @@ export class ShadeEngine {
 		}
 		this.setSolids();
 		if (indexed) this.grid.build(viewX, viewY, this.count, 2 * widest, 2 * highest);
-		else this.grid.leave(viewX, viewY, this.count);
+		else if (indexed === false) this.grid.leave(viewX, viewY, this.count);
 		this.widest = widest;
 		this.highest = highest;
 	}
@@ -279,20 +320,25 @@ export class ShadeEngine {
 		this.nearCount = 0;
 		const reachX = ex + this.widest;
 		const reachY = ey + this.highest;
-		const { order, xs, ys } = grid;
-		grid.box[0] = x;
-		grid.box[1] = y;
-		grid.box[2] = ex;
-		grid.box[3] = ey;
-		const rows = grid.ask();
+		const { lists } = this;
+		let rows = 1;
+		if (lists === null) {
+			grid.box[0] = x;
+			grid.box[1] = y;
+			grid.box[2] = ex;
+			grid.box[3] = ey;
+			rows = grid.ask();
+		}
+		const order = lists === null ? grid.order : lists.items;
 		for (let r = 0; r < rows; r++) {
-			const end = grid.to[r];
-			for (let k = grid.from[r]; k < end; k++) {
-				const dy = ys[k] - y;
-				if (dy >= reachY || -dy >= reachY) continue;
-				const dx = xs[k] - x;
-				if (dx >= reachX || -dx >= reachX) continue;
+			const row = lists === null ? 0 : i - lists.from;
+			const end = lists === null ? grid.to[r] : lists.ends[row * TIERS + this.tier];
+			for (let k = lists === null ? grid.from[r] : lists.starts[row]; k < end; k++) {
 				const j = order[k];
+				const dy = viewY[j] - y;
+				if (dy >= reachY || -dy >= reachY) continue;
+				const dx = viewX[j] - x;
+				if (dx >= reachX || -dx >= reachX) continue;
 				if (j === i) continue;
 				const g = groupOf[j];
 				const other = poses[g];
@@ -357,6 +403,11 @@ export class ShadeEngine {
 	/** Shaded shares of tables `from` to `to` (not itself) into `out` at their own places; how many are above 0. */
 	shares(out: Float64Array, from = 0, to = this.count): number {
 		let shaded = 0;
+		if (this.alikeOnly && this.poses[0].cosine > LEAST_COSINE) {
+			this.view.shares(this.poses[0].axes(), 0, out, from, to);
+			for (let i = from; i < to; i++) if (out[i] > 0) shaded++;
+			return shaded;
+		}
 		for (let i = from; i < to; i++) {
 			out[i] = this.share(i);
 			if (out[i] > 0) shaded++;

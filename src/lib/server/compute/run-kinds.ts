@@ -4,9 +4,11 @@ import {
 	joinAnswers,
 	joinEnergyYear,
 	mountYear,
-	shadeYear,
+	joinShadeYear,
+	shadeYearPart,
 	type AnswersPart,
 	type EnergyPart,
+	type ShadeYearPart,
 	type TrackerRange
 } from '../../core';
 import type { MountResult, RunInput, ShadeResult } from '../../core/results';
@@ -24,21 +26,24 @@ interface RunMethod<P extends object> {
 const SHADE_01 = 0.25;
 
 interface ShadeAndEnergy {
-	shade: ShadeResult;
+	shade: ShadeYearPart;
 	energy: EnergyPart | null;
 }
 
 const shade: RunMethod<ShadeAndEnergy> = {
 	part(input, onProgress, range) {
 		const asked = input.energy !== undefined;
-		const year = shadeYear(input, (done01) => onProgress(asked ? done01 * SHADE_01 : done01));
+		const year = shadeYearPart(input, (done01) => onProgress(asked ? done01 * SHADE_01 : done01), range);
 		if (!year || !asked) return year && { shade: year, energy: null };
 		const energy = energyYearPart(input, (done01) => onProgress(SHADE_01 + (1 - SHADE_01) * done01), range);
 		return energy && { shade: year, energy };
 	},
 	join(input, parts) {
 		const energies = parts.flatMap((part) => part.energy ?? []);
-		const year = parts[0].shade;
+		const year = joinShadeYear(
+			input,
+			parts.map((part) => part.shade)
+		);
 		return energies.length > 0 ? { ...year, energy: joinEnergyYear(input, energies) } : year;
 	}
 };
