@@ -13,3 +13,19 @@ export const monthNames = [
 	'Nov',
 	'Dec'
 ] as const;
+
+/** Names of the months for sentences, January first. */
+export const longMonthNames = [
+	'January',
+	'February',
+	'March',
+	'April',
+	'May',
+	'June',
+	'July',
+	'August',
+	'September',
+	'October',
+	'November',
+	'December'
+] as const;
