@@ -1,5 +1,6 @@
 import {
 	groundHeightM,
+	insideBoundary,
 	isMeasured,
 	measuredContours,
 	stretchesOnLand,
@@ -32,6 +33,7 @@ function drawMeasuredGround(pen: Pen, plot: Plot, map: MapFrame): void {
 		for (let j = 0; j <= LOOKS; j += 1) {
 			const east = minEastM + (i / LOOKS) * (maxEastM - minEastM);
 			const north = minNorthM + (j / LOOKS) * (maxNorthM - minNorthM);
+			if (plot.boundary.length > 0 && !insideBoundary(plot.boundary, east, north)) continue;
 			const heightM = groundHeightM(plot.ground, east, north);
 			lowest = Math.min(lowest, heightM);
 			highest = Math.max(highest, heightM);
