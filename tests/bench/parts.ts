@@ -1,4 +1,12 @@
-import { energyYearPart, joinEnergyYear, type EnergyPart, type RunInput } from '../../src/lib/core';
+import {
+	energyYearPart,
+	joinEnergyYear,
+	joinShadeYear,
+	shadeYearPart,
+	type EnergyPart,
+	type RunInput,
+	type ShadeYearPart
+} from '../../src/lib/core';
 
 export interface Range {
 	from: number;
@@ -21,7 +29,12 @@ const energy: PartRun<EnergyPart> = {
 	join: (input, parts) => joinEnergyYear(input, parts)
 };
 
-export const PART_RUNS = { energy };
+const year: PartRun<ShadeYearPart> = {
+	part: (input, range) => computed(shadeYearPart(input, undefined, range)),
+	join: (input, parts) => joinShadeYear(input, parts)
+};
+
+export const PART_RUNS = { energy, year };
 export type PartRunName = keyof typeof PART_RUNS;
 
 export interface PartTask {

@@ -10,7 +10,7 @@ import { listFigures, shareFigures, sunFigures } from './shares';
 const PARTS: [effects: string[], part: (bench: Bench) => void | Promise<void>][] = [
 	[['sun.'], sunFigures],
 	[['lists.', 'listsUnlike.'], listFigures],
-	[['alike.', 'unlike.'], shareFigures],
+	[['alike.', 'unlike.', 'sunBySun'], shareFigures],
 	[['native.', 'alike.regular.1000.ofNative'], nativeFigures],
 	[['year.', 'yearUnlike.'], yearFigures],
 	[['moved.', 'day.', 'dayUnlike.'], previewFigures],

@@ -15,6 +15,7 @@ import {
 import type { Bench } from './bench';
 import { alikeField, emptyPlot, FIELDS, model, place, planted, unlikeField } from './fields';
 import { shortestDaySuns } from './suns';
+import { threadFigures } from './threads';
 
 /** Whole runs are repeated until they have taken this long, at most five times. */
 const RUNS = { warmMs: 0, repeats: 5, budgetMs: 4000 };
@@ -24,7 +25,10 @@ const yearOf =
 	() =>
 		void shadeYear(input);
 
-export function yearFigures(bench: Bench): void {
+export async function yearFigures(bench: Bench): Promise<void> {
+	for (const count of bench.options.quick ? [1000] : [1000, 10000]) {
+		await threadFigures(bench, 'year', `year.regular.${count}`, alikeField('regular', count));
+	}
 	for (const field of bench.options.quick ? (['regular'] as const) : FIELDS)
 		bench.milliseconds(`year.${field}.1000.ms`, yearOf(alikeField(field, 1000)), RUNS);
 	if (!bench.options.quick) {
