@@ -1,7 +1,18 @@
 /** The same inputs give the same bytes, whatever was computed before. */
-import { describe, expect, it } from 'vitest';
-import { fieldLitPieces, fieldShade, prepareField, shadeYear, type RunInput } from '../../src/lib/core';
+import { describe, expect, it, vi } from 'vitest';
+import {
+	fieldLitPieces,
+	fieldShade,
+	joinShadeYear,
+	prepareField,
+	shadeYear,
+	shadeYearPart,
+	type RunInput
+} from '../../src/lib/core';
 import { testGrid, testLayout, testModel, testPlace, testPlot } from '../../src/lib/core/test-field';
+
+// Long only on a machine that is busy with other things.
+vi.setConfig({ testTimeout: 300_000 });
 
 const input = (): RunInput => ({
 	place: testPlace,
@@ -22,6 +33,22 @@ describe('same inputs, same bytes', () => {
 		shadeYear({ ...input(), layout: testLayout(testGrid(3, 2, 14, 8)) });
 		expect(JSON.stringify(shadeYear(input()))).toBe(first);
 		expect(first.length).toBeGreaterThan(10_000);
+	});
+
+	it('a year in one part or in several, as threads compute it', () => {
+		const whole = JSON.stringify(shadeYear(input()));
+		const count = input().layout.trackers.length;
+		for (const cuts of [
+			[0, 5, count],
+			[0, 1, 2, 7, count]
+		]) {
+			const parts = cuts.slice(1).map((to, k) => {
+				const part = shadeYearPart(input(), undefined, { from: cuts[k], to });
+				if (!part) throw new Error('Nothing stops this part');
+				return part;
+			});
+			expect(JSON.stringify(joinShadeYear(input(), parts))).toBe(whole);
+		}
 	});
 
 	it('a sun asked again after other suns, on one field and on a fresh one', () => {

@@ -1,6 +1,6 @@
 /** One engine, several ways through the same geometry: they must agree. */
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { prepareField } from '../../src/lib/core';
 import { tableGroup } from '../../src/lib/core/field';
 import { ShadeEngine, type TableGroup } from '../../src/lib/core/shade/engine';
@@ -8,6 +8,9 @@ import { testModel } from '../../src/lib/core/test-field';
 import { randomSource } from '../../src/lib/method/measure/random';
 import { randomField } from '../../src/lib/method/measure/random-fields';
 import { holds } from './scenes';
+
+// Long only on a machine that is busy with other things.
+vi.setConfig({ testTimeout: 300_000 });
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
 

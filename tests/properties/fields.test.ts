@@ -1,6 +1,6 @@
 /** What must hold for fields of trackers: followers on level ground, on a rise, flat, between their stops. */
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import {
 	arcContains,
 	fieldLoss,
@@ -21,6 +21,9 @@ import {
 } from '../../src/lib/core';
 import { testLayout, testModel, testPlace, testPlot, testTracker } from '../../src/lib/core/test-field';
 import { holds } from './scenes';
+
+// Long only on a machine that is busy with other things.
+vi.setConfig({ testTimeout: 300_000 });
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
 const suns = fc.record({ azimuthDeg: between(0, 359.9), elevationDeg: between(0.01, 89.9) });

@@ -1,8 +1,11 @@
 /** What must hold for any scene: laws of geometry that need no reference value. */
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { shadeScene, type ShadeScene } from '../../src/lib/core';
 import { holds, scenes } from './scenes';
+
+// Long only on a machine that is busy with other things.
+vi.setConfig({ testTimeout: 300_000 });
 
 const shares = (scene: ShadeScene): number[] => shadeScene(scene).map(({ shadedShare }) => shadedShare);
 /** The guards of the core stand at 1e-7 m and 1e-6 of a cosine, which a moved or scaled scene meets a little differently. */

@@ -92,5 +92,36 @@ export const lightEffects = [
 				howBig: 'closure of 0.5 W/m² in the mean square on the real file'
 			}
 		]
+	},
+	{
+		id: 'sky-view',
+		title: 'Sky that neighbours leave',
+		words:
+			'The even light of the sky reaches a table from all of it. From 96 directions the exact shaded share is asked as if the sun stood there, and summed with the cosine of incidence; the answer is kept for a net of suns and read between.',
+		sources: [
+			'Nodes of Gauss and Legendre in height, even in azimuth',
+			'Crossed strings: Hottel 1954 (from memory)'
+		],
+		neglected: [
+			{ what: 'Sum over directions and reading between suns', howBig: '5 % of the sky that is lost' },
+			{ what: 'What dark glass in between shines back', howBig: 'some percent of what it covers' }
+		]
+	},
+	{
+		id: 'energy-year',
+		title: 'Energy over a year',
+		words:
+			'Beam by lit share and incidence, light about the sun shaded as the beam, even light by the sky that is left, and light from the ground, step by step from a clear sky, monthly sums or a weather file. Losses to shade, to covered sky and to strings are told apart, as ranges with their reasons.',
+		sources: [
+			'Sum of the effects above',
+			'Range of the string effect: from the shaded area to the worst wiring'
+		],
+		neglected: [
+			{
+				what: 'Shade of the tables on the ground that they look at',
+				howBig: 'up to the light from the ground itself: some percent at albedo 0.2'
+			},
+			{ what: 'Everything behind the glass but the strings', howBig: 'see What is not modelled' }
+		]
 	}
 ] as const satisfies readonly Effect[];

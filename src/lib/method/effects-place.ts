@@ -2,6 +2,21 @@ import type { Effect } from './effect';
 
 export const placeEffects = [
 	{
+		id: 'ground',
+		title: 'Ground and skylines',
+		words:
+			'Ground is level, a slope, or measured: triangles between points or cells of a raster. Each tracker stands on it with its foot. Measured ground near a tracker makes a skyline of its own, every 3 degrees of bearing; the far skyline is the one that was entered.',
+		sources: ['Triangulation of Delaunay 1934', 'Bilinear interpolation inside a cell'],
+		neglected: [
+			{ what: 'Near skyline between its bearings', howBig: 'up to half a degree on strongly rolling ground' },
+			{
+				what: 'A table counts as hidden by ground or not with its middle',
+				howBig: 'minutes a day on steep land'
+			},
+			{ what: 'Curvature and refraction along the ground', howBig: '0.002° at 500 m' }
+		]
+	},
+	{
 		id: 'coordinates',
 		title: 'Degrees and metres',
 		words:

@@ -2,6 +2,20 @@ import type { Effect } from './effect';
 
 export const shadeEffects = [
 	{
+		id: 'machine',
+		title: 'Where a table stands and points',
+		words:
+			'A following table looks at the sun as far as its stops and tilt range allow: then at the reachable aim that is nearest in angle. Offsets of the axes and of the table carry its middle along. Reach and lowest corner are taken over every tilt, night and wind posture among them.',
+		sources: [
+			'n·s = sin t cos e cos(a - A) + cos t sin e, largest at tan t = cos e cos(a - A) / sin e',
+			'Stops as an arc clockwise, through north where it must'
+		],
+		neglected: [
+			{ what: 'Lag of the drive and its dead band', howBig: 'about 1° in good sun: 0.015 % of beam' },
+			{ what: 'Starting and braking when times of turning are told', howBig: 'a second or two' }
+		]
+	},
+	{
 		id: 'shade',
 		title: 'Exact shade',
 		words:
@@ -15,11 +29,24 @@ export const shadeEffects = [
 				what: 'Thickness of tables; poles and beams throw no shadow',
 				howBig: 'a pole of 0.3 m: some 1 % of what a table of 6 m takes, on its lower edge'
 			},
-			{
-				what: 'Crowns are upright prisms with an even transmission',
-				howBig: 'the state of the leaves is the larger doubt: 0.3 to 0.6 bare'
-			},
 			{ what: 'Light that steel and glass mirror on their neighbours', howBig: 'below 1 % of the beam' }
+		]
+	},
+	{
+		id: 'bodies',
+		title: 'Trees, buildings, walls, masts',
+		words:
+			'Every obstacle is made of convex bodies: trunk and crown, footprints cut into convex parts, walls in pieces along their line. A crown, a fence or a hedge lets a share of the beam through; of a tree there are two, bare and in leaf. Trees grow by the year up to their cap.',
+		sources: [
+			'Outline of a body: convex hull of its projected corners, Andrew 1979',
+			'Days in leaf where none are given: common practice, no source'
+		],
+		neglected: [
+			{ what: 'Roundness: crowns, trunks and masts have sixteen sides', howBig: 'up to 3 % of their shadow' },
+			{
+				what: 'The state of the leaves, gaps and single branches',
+				howBig: 'the larger doubt: a bare crown passes 0.3 to 0.6'
+			}
 		]
 	},
 	{
@@ -55,6 +82,20 @@ export const shadeEffects = [
 			{
 				what: 'Clouds, unless a weather year is chosen',
 				howBig: 'a loss in percent of beam changes by a tenth of itself'
+			}
+		]
+	},
+	{
+		id: 'answers',
+		title: 'Who takes whose light',
+		words:
+			'For every tracker the year is asked again with one neighbour away: what that gives back is what the neighbour takes. Which way to move is told from exact differences of the loss by a small step east and north. One day in seven is looked at.',
+		sources: ['Loss with all minus loss without one; finite differences of 0.1 m'],
+		neglected: [
+			{ what: 'Days between the ones that are looked at', howBig: 'within 0.01 points of every day' },
+			{
+				what: 'Shadows that overlap belong to nobody alone',
+				howBig: 'removals need not add up to the loss: both are shown'
 			}
 		]
 	}

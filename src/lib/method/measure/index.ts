@@ -1,5 +1,9 @@
 /** Every measured check, in the order in which the page shows its effects. */
 import type { Check } from '../check';
+import { machineChecks } from './machine';
+import { groundChecks } from './ground';
+import { energyChecks } from './energy';
+import { bodyChecks } from './bodies';
 import { clearSkyChecks } from './clear-sky';
 import { coordinateChecks } from './coordinates';
 import { decompositionChecks } from './decomposition';
@@ -21,10 +25,12 @@ export const checks: readonly Check[] = [
 	...practiceChecks,
 	...sunChecks,
 	...sunLibraryChecks,
+	...machineChecks,
 	...shadeChecks,
 	...unionChecks,
 	...rayChecks,
 	...fuzzChecks,
+	...bodyChecks,
 	...spacingChecks,
 	...mountChecks,
 	...yearLossChecks,
@@ -33,5 +39,7 @@ export const checks: readonly Check[] = [
 	...decompositionChecks,
 	...tiltedChecks,
 	...weatherChecks,
+	...energyChecks,
+	...groundChecks,
 	...coordinateChecks
 ];
