@@ -60,18 +60,16 @@ describe('a server that is killed outright while a run works', () => {
 		});
 		const asked = await callApi('POST', `/api/v1/projects/${projectId}/runs`, {
 			token,
-			body: { kind: 'answers', layoutId, year: 2026, stepMinutes: 2 }
+			body: { kind: 'answers', layoutId, year: 2026, stepMinutes: 10 }
 		});
 		const runId = asked.body.id as string;
 
 		const first = await startWorker();
 		await vi.waitFor(
 			async () => {
-				const row = await rowOf(runId);
-				expect(row.status).toBe('working');
-				expect(row.progress).toBeGreaterThan(0);
+				expect((await rowOf(runId)).status).toBe('working');
 			},
-			{ timeout: 60_000, interval: 50 }
+			{ timeout: 60_000, interval: 20 }
 		);
 		const gone = once(first, 'exit');
 		first.kill('SIGKILL');

@@ -18,7 +18,7 @@ export const THREADS = PARTS_AT_ONCE + 1;
 const LEAST_TRACKERS = 100;
 
 /** Kinds of run that can be computed tracker by tracker. */
-const inParts: ReadonlySet<RunKind> = new Set(['answers']);
+const inParts: ReadonlySet<RunKind> = new Set(['shade', 'answers']);
 
 /** In how many parts to compute a run of so many trackers. */
 export function partsOf(kind: RunKind, trackers: number): number {
