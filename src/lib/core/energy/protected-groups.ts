@@ -160,7 +160,8 @@ export class ProtectedGroups {
 		return touched;
 	}
 
-	private addRect(west: number, east: number, south: number, north: number): void {
+	/** A shadow with sides along the table's own axes, metres from the middle of the glass. */
+	addRect(west: number, east: number, south: number, north: number): void {
 		const c0 = this.columnFrom(west);
 		const c1 = this.columnTo(east);
 		const r0 = this.rowFrom(south);

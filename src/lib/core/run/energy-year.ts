@@ -12,7 +12,10 @@ import { BINS, emptyPart, PARTS, type EnergyPart, type TrackerRange } from './en
 import { energySteps, type EnergySteps } from './energy-steps';
 import { otherSkyModel } from './energy-words';
 import { assertStep } from './sun-steps';
+import { AlikeView } from '../shade/alike-view';
 
+/** Tables count as turned away from the sun below this cosine. */
+const LEAST_COSINE = 1e-6;
 /** Part of the work that the sky views are, for telling the progress. */
 const VIEWS_01 = 0.4;
 
@@ -135,7 +138,13 @@ class YearSums {
 	private readonly otherIsotropic: Float64Array;
 	private readonly otherHorizon: Float64Array;
 	private current: ProtectedGroups;
+	// First places of the present step's month and hour in lists by bin and tracker.
+	private month = 0;
+	private hour = 0;
+	/** Where all tables are alike and nothing else shades: their shadows are rectangles, had with the shares. */
+	private readonly alike: AlikeView | null;
 	private readonly visit = (shadow: Float64Array, corners: number): void => this.current.add(shadow, corners);
+	private readonly visitAlike: (i: number, hits: number) => void;
 
 	constructor(
 		private readonly field: Field,
@@ -158,6 +167,21 @@ class YearSums {
 			return counter;
 		});
 		this.current = this.groupsOf[0];
+		const { engine } = field;
+		const [group] = engine.groups;
+		const plain =
+			groups === 1 && group.halfGap === 0 && engine.solids.length === 0 && engine.horizons === null;
+		this.alike = plain ? new AlikeView(engine, group) : null;
+		const union = this.alike?.union;
+		this.visitAlike = (i, hits) => {
+			if (!union) return;
+			const { x, y } = union;
+			const { steelHalfWidth: w, steelHalfHeight: h } = group;
+			const counted = this.groupsOf[i];
+			counted.clear();
+			for (let k = 0; k < hits; k++) counted.addRect(x[k] - w, x[k] + w, y[k] - h, y[k] + h);
+			this.take(i, shares[i], counted);
+		};
 		this.beam = new Float64Array(groups);
 		this.circumsolar = new Float64Array(groups);
 		this.isotropic = new Float64Array(groups);
@@ -171,8 +195,11 @@ class YearSums {
 		const { field, steps } = this;
 		const sun = { azimuthDeg: steps.azimuthDeg[s], elevationDeg: steps.elevationDeg[s] };
 		const hidden = fieldSunHidden(field, sun);
-		field.engine.setSun(sun.azimuthDeg, sun.elevationDeg, !hidden);
-		this.sumWithout(s, sun.elevationDeg, hidden);
+		const { azimuthDeg, elevationDeg } = sun;
+		// Alike tables are looked up by the view that sums them.
+		const indexed = this.alike ? null : !hidden;
+		field.engine.setLight(azimuthDeg, elevationDeg, azimuthDeg, elevationDeg, indexed);
+		this.sumWithout(s, elevationDeg, hidden);
 		this.takeSky(s);
 		if (!hidden) this.takeShade(s);
 	}
@@ -285,43 +312,56 @@ class YearSums {
 
 	/** Beam and circumsolar light that shade takes, by area and by the strings. */
 	private takeShade(s: number): void {
-		const { part, shares, steps, field, beam, circumsolar, otherCircumsolar } = this;
+		const { part, shares, steps, field, alike, beam, circumsolar, otherCircumsolar } = this;
 		const { engine } = field;
 		const { from, to } = part;
+		const size = to - from;
+		this.month = steps.month[s] * size;
+		this.hour = (12 + steps.hour[s]) * size;
+		if (alike) {
+			const { cosine } = engine.poses[0];
+			if (cosine <= LEAST_COSINE || (beam[0] === 0 && circumsolar[0] === 0 && otherCircumsolar[0] === 0))
+				return;
+			alike.shares(engine.poses[0].axes(), 0, shares, from, to, this.visitAlike);
+			return;
+		}
 		engine.setDay(steps.day[s]);
 		if (engine.shares(shares, from, to) === 0) return;
-		const size = to - from;
-		const month = steps.month[s] * size;
-		const hour = (12 + steps.hour[s]) * size;
 		for (let i = from; i < to; i++) {
-			const share = shares[i];
-			if (share === 0) continue;
+			if (shares[i] === 0) continue;
 			const g = engine.groupOf[i];
 			if (beam[g] === 0 && circumsolar[g] === 0 && otherCircumsolar[g] === 0) continue;
-			let likely = 1;
-			let worst = 1;
-			if (share < 1) {
-				const groups = (this.current = this.groupsOf[i]);
-				groups.clear();
+			const groups = (this.current = this.groupsOf[i]);
+			groups.clear();
+			if (shares[i] < 1) {
 				engine.collect(i);
 				engine.shadowsAhead(i, 0, this.visit);
-				likely = stringLoss(share, groups.shaded, groups.count);
-				worst = Math.max(likely, groups.stringsTouched() / groups.strings);
 			}
-			const k = i - from;
-			const direct = beam[g] + circumsolar[g];
-			const beamLost = beam[g] * share;
-			const circumsolarLost = circumsolar[g] * share;
-			const strings = direct * (likely - share);
-			part.beamLost[month + k] += beamLost;
-			part.beamLost[hour + k] += beamLost;
-			part.circumsolarLost[month + k] += circumsolarLost;
-			part.circumsolarLost[hour + k] += circumsolarLost;
-			part.stringsLost[month + k] += strings;
-			part.stringsLost[hour + k] += strings;
-			part.worstLost[k] += direct * (worst - share);
-			part.otherShadeLost[k] += (beam[g] + otherCircumsolar[g]) * likely;
+			this.take(i, shares[i], groups);
 		}
+	}
+
+	/** Shade of a table with its cell groups counted; a table wholly in shade loses all whatever was counted. */
+	private take(i: number, share: number, groups: ProtectedGroups): void {
+		const { part, beam, circumsolar, otherCircumsolar } = this;
+		const g = this.field.engine.groupOf[i];
+		const likely = share < 1 ? stringLoss(share, groups.shaded, groups.count) : 1;
+		const worst = share < 1 ? Math.max(likely, groups.stringsTouched() / groups.strings) : 1;
+		const k = i - part.from;
+		const month = this.month + k;
+		const hour = this.hour + k;
+		const direct = beam[g] + circumsolar[g];
+		const beamLost = beam[g] * share;
+		const circumsolarLost = circumsolar[g] * share;
+		const strings = direct * (likely - share);
+		part.beamLost[month] += beamLost;
+		part.beamLost[hour] += beamLost;
+		part.circumsolarLost[month] += circumsolarLost;
+		part.circumsolarLost[hour] += circumsolarLost;
+		part.stringsLost[month] += strings;
+		part.stringsLost[hour] += strings;
+		part.worstLost[k] += direct * (worst - share);
+		part.otherShadeLost[k] += (beam[g] + otherCircumsolar[g]) * likely;
 	}
 }
 

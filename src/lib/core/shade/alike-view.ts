@@ -17,7 +17,8 @@ const MOST_CELLS_A_TABLE = 4;
  * once its whole width is covered: whatever falls farther off lies within what is covered already.
  */
 export class AlikeView {
-	private readonly union = new CornerUnion();
+	/** Shadows on the table that `visit` is called for: the first `hits` middles. */
+	readonly union = new CornerUnion();
 	private x = new Float64Array(0);
 	private y = new Float64Array(0);
 	private cell = new Int32Array(0);
@@ -34,9 +35,17 @@ export class AlikeView {
 
 	/**
 	 * Shaded shares of tables `from` to `to` (not itself) into `out` at their own places. `axes` from `offset` on: U, V
-	 * (offsets to places on the plane, along the light) and the normal. The front must face the light.
+	 * (offsets to places on the plane, along the light) and the normal. The front must face the light. `visit` hears of each
+	 * table with any shade; shadows that fall wholly within others may be missing then.
 	 */
-	shares(axes: Float64Array, offset: number, out: Float64Array, from: number, to: number): void {
+	shares(
+		axes: Float64Array,
+		offset: number,
+		out: Float64Array,
+		from: number,
+		to: number,
+		visit?: (i: number, hits: number) => void
+	): void {
 		const { tables, group, union } = this;
 		const { count, east, north, up } = tables;
 		const { halfWidth, halfHeight, steelHalfWidth, steelHalfHeight } = group;
@@ -176,6 +185,7 @@ export class AlikeView {
 				union.measure(hits);
 				const share = union.found[0] / area;
 				out[i] = share < 1 ? share : 1;
+				if (visit && share > 0) visit(i, hits);
 			}
 		}
 	}
