@@ -75,7 +75,7 @@ const TRIES: readonly (readonly [string, (random: Random) => number])[] = [
 ];
 
 function* rows(extent: Extent): Generator<Row> {
-	const count = extent === 'whole' ? 100_000 : 2000;
+	const count = extent === 'whole' ? 100_000 : 1000;
 	for (let k = 0; k < count; k++) {
 		const [kind, attempt] = TRIES[k % TRIES.length];
 		// Each scene from its own seed, so that one can be looked at alone.
