@@ -1,9 +1,11 @@
 /** Cell groups that shadows touch: counted against clipped areas in random fields. */
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import { prepareField, ProtectedGroups, stringEffect, LEAST_REACH_M } from '../../src/lib/core';
 import type { Obstacle, Posture, Tracker } from '../../src/lib/core/document';
 import { testLayout, testModel, testPlace, testPlot, testTracker } from '../../src/lib/core/test-field';
 import { randomSource } from '../../src/lib/method/measure/random';
+
+vi.setConfig({ testTimeout: 60_000 });
 
 type Point = [number, number];
 

@@ -1,5 +1,5 @@
 /** How much of the sky each table sees: closed forms, rays, and a finer sum over directions. */
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import {
 	gaussLegendre01,
 	prepareField,
@@ -20,6 +20,8 @@ import {
 } from '../../src/lib/core/test-field';
 import type { Posture, Tracker, TrackerModel } from '../../src/lib/core/document';
 import { randomSource } from '../../src/lib/method/measure/random';
+
+vi.setConfig({ testTimeout: 60_000 });
 
 const radians = Math.PI / 180;
 

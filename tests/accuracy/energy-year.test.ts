@@ -2,7 +2,7 @@
 import { readFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { gunzipSync } from 'node:zlib';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import {
 	checkEnergy,
 	defaultLinkeTurbidity,
@@ -39,6 +39,9 @@ import {
 	testTracker
 } from '../../src/lib/core/test-field';
 import { readWeather } from '../../src/lib/exchange/weather';
+
+// Whole years of small fields; the machine may be busy with others.
+vi.setConfig({ testTimeout: 60_000 });
 
 const golden = readWeather(
 	gunzipSync(readFileSync(join(import.meta.dirname, '../fixtures/weather/golden-tmy3.csv.gz')))
@@ -286,6 +289,42 @@ describe('the energy of a field', () => {
 		// Each run shows the other's model.
 		near(result.field.otherModel.withoutKwhM2, other.field.without.total, 1e-9);
 		near(result.field.otherModel.totalLoss, other.field.losses.total.likely, 1e-9);
+	});
+});
+
+describe('alike tables', () => {
+	it('by rectangles give what they give by cutting, on level and on rising ground', () => {
+		// A kerb in the north, too low to shade anything, sends every table the long way.
+		const kerb = {
+			id: 'o1',
+			kind: 'box' as const,
+			name: '',
+			eastM: 0,
+			northM: 2000,
+			sizeXM: 1,
+			sizeYM: 1,
+			heightM: 0.2,
+			turnDeg: 0
+		};
+		const strung = testModel({ moduleColumns: 6, moduleRows: 2, modulesPerString: 4, frameMarginM: 0.05 });
+		const average: EnergySettings = { ...clear, sky: { source: 'average', monthlyHorizontalKwhM2: sums } };
+		for (const risePercent of [0, 6]) {
+			const ground = { kind: 'plane' as const, heightM: 0, risePercent: -risePercent, riseTowardsDeg: 0 };
+			const ask = (plot: Plot) =>
+				yearOf(
+					runOf([], average, { plot, layout: testLayout(testGrid(4, 4, 9, 8), [strung]), stepMinutes: 20 })
+				);
+			const quick = ask(testPlot({ ground }));
+			const long = ask(testPlot({ ground, obstacles: [kerb] }));
+			quick.trackers.forEach((one, k) => {
+				const other = long.trackers[k];
+				near(one.losses.beam, other.losses.beam, 1e-9);
+				near(one.losses.sky, other.losses.sky, 1e-9);
+				near(one.losses.electrical.likely, other.losses.electrical.likely, 1e-6);
+				near(one.losses.electrical.high, other.losses.electrical.high, 1e-6);
+			});
+			expect(quick.field.losses.electrical.high).toBeGreaterThan(0);
+		}
 	});
 });
 
