@@ -46,6 +46,7 @@ export * from './energy/string-effect';
 export * from './energy/weather-year';
 export * from './energy/tracking-gain';
 export * from './run/day-shade';
+export * from './run/live-day';
 export * from './run/winter';
 export * from './run/shade-year';
 export { shadeSums, type FieldSums } from './run/shade-sums';

@@ -1,5 +1,6 @@
 import { sunVector } from '../conventions';
 import type { Mount, MountEdge } from '../document';
+import { dayOfYear } from '../energy/extraterrestrial';
 import { fieldSunHidden, LIT_UNDER_CROWN, prepareField, type Field } from '../field';
 import type { MountClass, MountPlaceResult, MountResult, RunInput, TrackerMounts } from '../results';
 import { assertStep, SunSky, type SunStep } from '../run/sun-steps';
@@ -90,6 +91,11 @@ function markPlaces(
 	marks: Uint8Array,
 	sun: SunStep
 ): boolean {
+	// Near ground hides the light from a machine as a whole, by the middle of its table.
+	if (engine.hidden(i)) {
+		marks.fill(1);
+		return true;
+	}
 	marks.fill(0);
 	let any = false;
 	if (Math.abs(engine.cosine(i)) > EDGE_ON) {
@@ -106,7 +112,7 @@ function markPlaces(
 	const centre = engine.centre(i);
 	const own = rayTable(engine, i);
 	const others = engine.collectedTables().map((j) => rayTable(engine, j));
-	const solids = engine.collectedSolids().filter((solid) => solid.passes < LIT_UNDER_CROWN);
+	const solids = engine.collectedSolids(LIT_UNDER_CROWN);
 	for (let k = 0; k < marks.length; k++) {
 		const p = [0, 1, 2].map(
 			(c) => centre[c] + places.xs[k] * pose.u[c] + places.ys[k] * pose.v[c] + places.forwardM * pose.n[c]
@@ -172,6 +178,7 @@ export function mountYear(
 		const last = s > 0 ? steps[s - 1] : null;
 		const newDay = last !== null && last.day !== sun.day;
 		const gap = last !== null && last.index !== sun.index - 1;
+		if (last === null || newDay) engine.setDay(dayOfYear(sun.day * DAY_MS));
 		engine.setSun(sun.azimuthDeg, sun.elevationDeg);
 		for (let i = 0; i < tallies.length; i++) {
 			const tally = tallies[i];
@@ -180,7 +187,7 @@ export function mountYear(
 			const facing = engine.cosine(i) > 0;
 			const { places } = tally;
 			const found = engine.collect(i, places.outM + Math.abs(places.forwardM));
-			if (found === 0 && engine.cosine(i) > EDGE_ON) {
+			if (found === 0 && engine.cosine(i) > EDGE_ON && !engine.hidden(i)) {
 				tally.clearStep(true);
 				continue;
 			}
@@ -206,7 +213,7 @@ function summarise(
 	field: Field,
 	tallies: readonly MountTally[],
 	results: readonly MountPlaceResult[][],
-	steps: readonly SunStep[],
+	steps: readonly (SunStep & { day: number })[],
 	onProgress?: (done01: number) => boolean
 ): MountResult | null {
 	const { trackers } = input.layout;
@@ -277,7 +284,7 @@ function summarise(
 function nameBlockers(
 	field: Field,
 	wanted: readonly { tracker: number; mount: Mount }[],
-	steps: readonly SunStep[]
+	steps: readonly (SunStep & { day: number })[]
 ): Map<string, string> {
 	const named = new Map<string, string>();
 	if (wanted.length === 0) return named;
@@ -285,6 +292,7 @@ function nameBlockers(
 	const counts = wanted.map(() => new Map<number, number>());
 	const heads = wanted.map(({ tracker, mount }) => mountPoint(models[tracker], mount));
 	for (let s = 0; s < steps.length; s += BLAME_EVERY) {
+		engine.setDay(dayOfYear(steps[s].day * DAY_MS));
 		engine.setSun(steps[s].azimuthDeg, steps[s].elevationDeg);
 		wanted.forEach(({ tracker: i, mount }, w) => {
 			if (engine.cosine(i) <= EDGE_ON) return;

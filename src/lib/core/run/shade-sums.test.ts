@@ -1,9 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Obstacle, Tracker } from '../document';
-import { prepareField, type Field } from '../field';
+import { fieldShade, moveTracker, prepareField, type Field } from '../field';
 import { testLayout, testModel, testPlace, testPlot } from '../test-field';
 import { ANY_SHADE } from '../shade/alike-kernel';
+import { LiveDay } from './live-day';
 import { shadeSums } from './shade-sums';
 import { sunTable, type TableSun } from './sun-table';
 
@@ -154,9 +155,9 @@ describe('sums of shade over many suns', () => {
 					expect(Math.abs(steps - plain.shaded[k])).toBeLessThanOrEqual(1)
 				);
 			}),
-			{ seed: 20261201, numRuns: 250 }
+			{ seed: 20261201, numRuns: 150 }
 		);
-	});
+	}, 60_000);
 
 	it('of a part are the same numbers as in the whole', () => {
 		fc.assert(
@@ -178,7 +179,42 @@ describe('sums of shade over many suns', () => {
 			),
 			{ seed: 20261202, numRuns: 100 }
 		);
-	});
+	}, 60_000);
+
+	it('of a day keep up with a tracker that is moved', () => {
+		fc.assert(
+			fc.property(
+				fieldArbitrary,
+				fc.array(sunArbitrary, { minLength: 1, maxLength: 8 }),
+				fc.array(
+					fc.tuple(
+						fc.nat(),
+						fc.double({ min: -10, max: 60, noNaN: true }),
+						fc.double({ min: -10, max: 60, noNaN: true })
+					),
+					{
+						minLength: 1,
+						maxLength: 3
+					}
+				),
+				(shape, suns, moves) => {
+					const field = fieldOf(shape);
+					const live = new LiveDay(field, suns, 20);
+					let moved = field;
+					for (const [pick, eastM, northM] of moves) {
+						live.move(pick % field.engine.count, eastM, northM);
+						moved = moveTracker(moved, pick % field.engine.count, eastM, northM);
+					}
+					suns.forEach((sun, k) => {
+						fieldShade(moved, sun, 20).forEach((share, i) =>
+							expect(Math.abs(share - live.shares[k][i])).toBeLessThan(1e-9)
+						);
+					});
+				}
+			),
+			{ seed: 20261205, numRuns: 150 }
+		);
+	}, 60_000);
 
 	it('of a moment agree with the plain question', () => {
 		fc.assert(
@@ -192,5 +228,5 @@ describe('sums of shade over many suns', () => {
 			}),
 			{ seed: 20261203, numRuns: 300 }
 		);
-	});
+	}, 60_000);
 });

@@ -4,6 +4,7 @@ import { hullOrder } from './hull';
 import { LitPieces, flatArea } from './pieces';
 import { RectUnion } from './rect-union';
 import { TIERS, type SectorLists } from './sector-lists';
+import { ShadowUnion } from './shadow-union';
 import { passesOn, type Solid } from './solid';
 import { ViewGrid } from './view-grid';
 
@@ -102,6 +103,8 @@ export class ShadeEngine {
 	private readonly alikeOnly: boolean;
 	private readonly view: AlikeView;
 	private readonly rects = new RectUnion();
+	private readonly union = new ShadowUnion();
+	private readonly pair = new Float64Array(9);
 	private readonly pieces = new LitPieces();
 	private readonly shadow = new Float64Array(2 * MOST_SHADOW_CORNERS);
 	private readonly corners = new Float64Array(3 * MOST_SHADOW_CORNERS);
@@ -297,6 +300,41 @@ export class ShadeEngine {
 		return this.poses[this.groupOf[i]].cosine;
 	}
 
+	/**
+	 * Puts the fixed point of table i elsewhere, metres. Until the next light only tables found without an index may be
+	 * asked about: set the sun with `indexed` false. Near skylines stay those of the old place.
+	 */
+	place(i: number, eastM: number, northM: number, upM: number): void {
+		const { axisX: ax, axisY: ay } = this;
+		this.east[i] = eastM;
+		this.north[i] = northM;
+		this.up[i] = upM;
+		const pose = this.poses[this.groupOf[i]];
+		this.viewX[i] = eastM * ax[0] + northM * ax[1] + pose.viewX;
+		this.viewY[i] = eastM * ay[0] + northM * ay[1] + upM * ay[2] + pose.viewY;
+	}
+
+	/** Adds to `found`, behind the first `count`, every table whose outline meets that of table i in the light's view. */
+	meeting(i: number, found: Int32Array, count: number): number {
+		const { viewX, viewY, poses, groupOf } = this;
+		const own = poses[groupOf[i]];
+		const reachX = own.extentX + this.widest;
+		const reachY = own.extentY + this.highest;
+		const x = viewX[i];
+		const y = viewY[i];
+		let n = count;
+		for (let j = 0; j < this.count; j++) {
+			const dx = viewX[j] - x;
+			if (dx >= reachX || -dx >= reachX) continue;
+			const dy = viewY[j] - y;
+			if (dy >= reachY || -dy >= reachY || j === i) continue;
+			let known = false;
+			for (let k = 0; k < count && !known; k++) known = found[k] === j;
+			if (!known) found[n++] = j;
+		}
+		return n;
+	}
+
 	/** Middle of a table's glass, local frame, metres. */
 	centre(i: number): [number, number, number] {
 		const { offset } = this.poses[this.groupOf[i]];
@@ -389,9 +427,14 @@ export class ShadeEngine {
 		return Array.from(this.near.subarray(0, this.nearCount));
 	}
 
-	/** Solids that the last `collect` found. */
-	collectedSolids(): Solid[] {
-		return Array.from(this.nearSolids.subarray(0, this.nearSolidCount), (k) => this.solids[k]);
+	/** Solids that the last `collect` found and that pass less than a share of the light on the present day. */
+	collectedSolids(passLessThan = Infinity): Solid[] {
+		const found: Solid[] = [];
+		for (let k = 0; k < this.nearSolidCount; k++) {
+			const solid = this.nearSolids[k];
+			if (this.solidPasses[solid] < passLessThan) found.push(this.solids[solid]);
+		}
+		return found;
 	}
 
 	/** Shaded share of table i, 0..1; 1 when its front is not lit. */
@@ -416,7 +459,7 @@ export class ShadeEngine {
 	}
 
 	/** Whether near ground hides the light from table i. */
-	private hidden(i: number): boolean {
+	hidden(i: number): boolean {
 		return this.horizons !== null && this.horizons.hides(i, this.lightAzimuthDeg, this.lightElevationDeg);
 	}
 
@@ -455,6 +498,7 @@ export class ShadeEngine {
 			alike = other.azimuthDeg === pose.azimuthDeg && other.tiltDeg === pose.tiltDeg;
 		}
 		if (alike) return Math.min(1, this.alikeArea(i) / area);
+		if (this.nearAreOpaque()) return Math.min(1, Math.max(0, this.opaqueArea(i) / area));
 		this.cutPieces(i);
 		return Math.min(1, Math.max(0, 1 - this.pieces.litArea() / area));
 	}
@@ -503,6 +547,113 @@ export class ShadeEngine {
 		return area;
 	}
 
+	/** Area shaded on a whole table by opaque things, m². */
+	private opaqueArea(i: number): number {
+		const { union, groupOf, groups, poses, corners, pair } = this;
+		const pose = poses[groupOf[i]];
+		const { halfWidth: w, halfHeight: h, halfGap } = groups[groupOf[i]];
+		const { next } = union;
+		union.begin(w, h);
+		// The table's own slot comes in as one more shadow and is taken off again.
+		if (halfGap > 0) {
+			next[0] = -halfGap;
+			next[1] = halfGap;
+			next[2] = -h;
+			next[3] = h;
+			union.addRect();
+		}
+		for (let pass = 0; pass < 2; pass++) {
+			const aligned = pass === 0;
+			for (let k = 0; k < this.nearCount; k++) {
+				const j = this.near[k];
+				const other = poses[groupOf[j]];
+				const same = other.azimuthDeg === pose.azimuthDeg && other.tiltDeg === pose.tiltDeg;
+				if (same !== aligned) continue;
+				const shader = groups[groupOf[j]];
+				this.pairUp(i, j, pose, other, shader);
+				const cx = pair[0];
+				const cy = pair[1];
+				const cd = pair[2];
+				const uX = pair[3];
+				const uY = pair[4];
+				const uD = pair[5];
+				const vX = pair[6];
+				const vY = pair[7];
+				const vD = pair[8];
+				const ex = Math.abs(uX) + Math.abs(vX);
+				const ey = Math.abs(uY) + Math.abs(vY);
+				if (cx - ex >= w || cx + ex <= -w || cy - ey >= h || cy + ey <= -h) continue;
+				const lean = Math.abs(uD) + Math.abs(vD);
+				if (cd + lean <= UP_SUN_M) continue;
+				const parts = shader.halfGap > 0 ? 2 : 1;
+				const slot = shader.halfGap / shader.steelHalfWidth;
+				for (let part = 0; part < parts; part++) {
+					const a = parts === 2 && part === 1 ? slot : -1;
+					const b = parts === 2 && part === 0 ? -slot : 1;
+					if (same) {
+						next[0] = cx + a * uX;
+						next[1] = cx + b * uX;
+						next[2] = cy - vY;
+						next[3] = cy + vY;
+						union.addRect();
+					} else if (cd - lean > UP_SUN_M) {
+						next[0] = cx + a * uX - vX;
+						next[1] = cy + a * uY - vY;
+						next[2] = cx + b * uX - vX;
+						next[3] = cy + b * uY - vY;
+						next[4] = cx + b * uX + vX;
+						next[5] = cy + b * uY + vY;
+						next[6] = cx + a * uX + vX;
+						next[7] = cy + a * uY + vY;
+						union.add(4);
+					} else {
+						for (let c = 0; c < 4; c++) {
+							const along = c === 0 || c === 3 ? a : b;
+							const up = c < 2 ? -1 : 1;
+							corners[3 * c] = cx + along * uX + up * vX;
+							corners[3 * c + 1] = cy + along * uY + up * vY;
+							corners[3 * c + 2] = cd + along * uD + up * vD;
+						}
+						const m = this.clipUpSun(4);
+						for (let c = 0; c < 2 * m; c++) next[c] = this.shadow[c];
+						if (m > 0) union.add(m);
+					}
+				}
+			}
+			if (aligned) union.endRects();
+		}
+		for (let k = 0; k < this.nearSolidCount; k++) {
+			const m = this.solidShadow(i, this.nearSolids[k], 0);
+			for (let c = 0; c < 2 * m; c++) next[c] = this.shadow[c];
+			if (m > 0) union.add(m);
+		}
+		return union.area() - 4 * halfGap * h;
+	}
+
+	/**
+	 * Where the middle of table j falls on the plane of table i along the light and how far up-sun it stands, then the
+	 * same of its half sides: into `pair`.
+	 */
+	private pairUp(i: number, j: number, pose: GroupPose, other: GroupPose, shader: TableGroup): void {
+		const { pair } = this;
+		const { n, cosine, ux, uy, uz, vx, vy, vz } = pose;
+		const dx = this.east[j] + other.offset[0] - this.east[i] - pose.offset[0];
+		const dy = this.north[j] + other.offset[1] - this.north[i] - pose.offset[1];
+		const dz = this.up[j] + other.offset[2] - this.up[i] - pose.offset[2];
+		pair[0] = ux * dx + uy * dy + uz * dz;
+		pair[1] = vx * dx + vy * dy + vz * dz;
+		pair[2] = (n[0] * dx + n[1] * dy + n[2] * dz) / cosine;
+		const w = shader.steelHalfWidth;
+		const h = shader.steelHalfHeight;
+		const { u, v } = other;
+		pair[3] = w * (ux * u[0] + uy * u[1] + uz * u[2]);
+		pair[4] = w * (vx * u[0] + vy * u[1] + vz * u[2]);
+		pair[5] = (w * (n[0] * u[0] + n[1] * u[1] + n[2] * u[2])) / cosine;
+		pair[6] = h * (ux * v[0] + uy * v[1] + uz * v[2]);
+		pair[7] = h * (vx * v[0] + vy * v[1] + vz * v[2]);
+		pair[8] = (h * (n[0] * v[0] + n[1] * v[1] + n[2] * v[2])) / cosine;
+	}
+
 	private cutPieces(i: number): void {
 		const { pieces, shadow } = this;
 		const { halfWidth: w, halfHeight: h, halfGap } = this.groups[this.groupOf[i]];
@@ -524,6 +675,11 @@ export class ShadeEngine {
 			const m = this.solidShadow(i, this.nearSolids[k], 0);
 			if (m > 0) pieces.subtract(shadow, m, this.solidPasses[this.nearSolids[k]]);
 		}
+	}
+
+	private nearAreOpaque(): boolean {
+		for (let k = 0; k < this.nearSolidCount; k++) if (this.solidPasses[this.nearSolids[k]] > 0) return false;
+		return true;
 	}
 
 	private tableParts(j: number): number {

@@ -7,8 +7,21 @@ export class RectUnion {
 	private cuts = new Float64Array(32);
 	private count = 0;
 
+	private readonly one = new Float64Array(4);
+
+	/** Rectangles kept: none lies inside another. */
+	get size(): number {
+		return this.count;
+	}
+
 	clear(): void {
 		this.count = 0;
+	}
+
+	/** Rectangle k as x0, x1, y0, y1; good until the next call. */
+	at(k: number): Float64Array {
+		for (let c = 0; c < 4; c++) this.one[c] = this.rects[4 * k + c];
+		return this.one;
 	}
 
 	/** Adds [x0, x1] x [y0, y1]; an empty one is passed over. */
