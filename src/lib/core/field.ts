@@ -3,7 +3,7 @@ import type { Layout, Place, Plot, Posture, TrackerModel } from './document';
 import { groundHeightM } from './geometry/ground';
 import { prepareSkyline, sunHidden, type PreparedSkyline } from './geometry/skyline';
 import { terrainHorizons, type TerrainHorizons } from './geometry/terrain-horizon';
-import { aimOf } from './machine/aim';
+import { aimOf, type Aim } from './machine/aim';
 import { centreOffset } from './machine/pose';
 import { ShadeEngine, type TableGroup } from './shade/engine';
 import { obstacleSolids } from './shade/obstacle-solids';
@@ -36,6 +36,12 @@ export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
 	const stands = posture.kind === 'standing' || posture.kind === 'night';
 	const fixedAim = stands ? aimOf(model, posture, sun) : null;
 	const still = fixedAim ? { ...fixedAim, offset: centreOffset(model, fixedAim) } : null;
+	const aimAt = (azimuthDeg: number, elevationDeg: number): Aim => {
+		if (still) return still;
+		sun.azimuthDeg = azimuthDeg;
+		sun.elevationDeg = elevationDeg;
+		return aimOf(model, posture, sun);
+	};
 	return {
 		halfWidth: model.widthM / 2,
 		halfHeight: model.heightM / 2,
@@ -43,11 +49,10 @@ export function tableGroup(model: TrackerModel, posture: Posture): TableGroup {
 		steelHalfHeight: model.heightM / 2 + model.frameMarginM,
 		halfGap: Math.max(0, Math.min(model.centreGapM, model.widthM)) / 2,
 		offsetReach: Math.abs(model.tiltAxisOffsetM) + Math.hypot(model.tableOffsetM, model.centreShiftM),
+		aimAt,
 		poseAt(azimuthDeg, elevationDeg) {
 			if (still) return still;
-			sun.azimuthDeg = azimuthDeg;
-			sun.elevationDeg = elevationDeg;
-			const aim = aimOf(model, posture, sun);
+			const aim = aimAt(azimuthDeg, elevationDeg);
 			return { ...aim, offset: centreOffset(model, aim) };
 		}
 	};

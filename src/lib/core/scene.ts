@@ -78,6 +78,7 @@ export function fixedGroup(
 		steelHalfHeight: table.heightM / 2,
 		halfGap: 0,
 		offsetReach: 0,
+		aimAt: () => fixed,
 		poseAt: () => fixed
 	};
 }

@@ -85,6 +85,7 @@ export function fieldLoss(request: FieldLossRequest): FieldLossResult {
 		[
 			{
 				...group,
+				aimAt: (azimuthDeg, elevationDeg) => followAim(model, { azimuthDeg, elevationDeg }),
 				poseAt(azimuthDeg, elevationDeg) {
 					const aim = followAim(model, { azimuthDeg, elevationDeg });
 					return { ...aim, offset: centreOffset(model, aim) };

@@ -1,10 +1,14 @@
-import type { AimedPose, TableGroup } from './engine';
+import type { Aim } from '../machine/aim';
+import type { TableGroup } from './engine';
 import { CornerUnion } from './corner-union';
 import { TIERS, type ListedTables, type SectorLists } from './sector-lists';
 import { sunVector, tableAxes } from '../conventions';
 
 /** Shaders must stand this far up-sun along the target's normal, metres. */
 const UP_SUN_M = 1e-7;
+/** Offsets are rounded to 1 / UNITS metres by adding and taking away ROUNDER; good for fields of up to 2,000 km. */
+const UNITS = 2 ** 30;
+const ROUNDER = 1.5 * 2 ** 22;
 /** A table counts as turned away from the sun below this cosine. */
 const LEAST_COSINE = 1e-6;
 
@@ -34,7 +38,9 @@ export const ANY_SHADE = 1e-9;
 
 /**
  * Shade of tables that are all of one kind and one pose at a time: shadows are rectangles along the table's own axes.
- * Goes table by table through the lights of a sector, so that a table's neighbours stay at hand.
+ * Goes table by table through the lights of a sector, so that a table's neighbours stay at hand. Tables whose
+ * neighbours stand alike, as in every regular field, have the same shade: it is computed once for each such
+ * neighbourhood, offsets rounded to 2^-30 m, so that it does not matter which of the tables came first.
  */
 export class AlikeKernel {
 	/** Numbers of each light in `axes`. */
@@ -42,23 +48,31 @@ export class AlikeKernel {
 	/** [light - first][U, V, n]: projections of an offset on the table and ahead of it. */
 	axes = new Float64Array(0);
 	private facing = new Float64Array(0);
+	/** Offsets to the neighbours of one table, side by side. */
 	private near = new Float64Array(3 * 256);
 	private readonly union = new CornerUnion();
+	private readonly known = new KnownNeighbourhoods();
+	/** Bins that the sector's lights fall into, and the place of each light's among them. */
+	private slotBin = new Int32Array(0);
+	private slotOf = new Uint16Array(0);
+	private slots = 0;
 
-	/** Turns to the lights of a sector; `poseAt` as a group's. True when every pose keeps to the light's azimuth. */
-	setSuns(suns: SectorSuns, poseAt: (azimuthDeg: number, elevationDeg: number) => AimedPose): boolean {
+	/** Turns to the lights of a sector; `aimAt` as a group's. True when every pose keeps to the light's azimuth. */
+	setSuns(suns: SectorSuns, aimAt: (azimuthDeg: number, elevationDeg: number) => Aim): boolean {
 		const count = suns.end - suns.first;
 		if (this.facing.length < count) {
 			this.axes = new Float64Array(AlikeKernel.FIELDS * count);
 			this.facing = new Float64Array(count);
+			this.slotOf = new Uint16Array(count);
 		}
+		this.setSlots(suns);
 		const { FIELDS } = AlikeKernel;
 		const { axes, facing } = this;
 		let square = true;
 		for (let k = 0; k < count; k++) {
 			const azimuth = suns.azimuthDeg[suns.first + k];
 			const elevation = suns.elevationDeg[suns.first + k];
-			const pose = poseAt(azimuth, elevation);
+			const pose = aimAt(azimuth, elevation);
 			if (pose.azimuthDeg !== azimuth) square = false;
 			const s = sunVector(azimuth, elevation);
 			const { u, v, n } = tableAxes(pose.azimuthDeg, pose.tiltDeg);
@@ -81,9 +95,27 @@ export class AlikeKernel {
 		return this.facing[k];
 	}
 
+	/** Distinct bins of the sector's lights. */
+	private setSlots({ bin, first, end }: SectorSuns): void {
+		if (this.slotBin.length < end - first) this.slotBin = new Int32Array(end - first);
+		const { slotBin, slotOf } = this;
+		this.slots = 0;
+		for (let k = 0; k < end - first; k++) {
+			let slot = 0;
+			while (slot < this.slots && slotBin[slot] !== bin[first + k]) slot++;
+			if (slot === this.slots) slotBin[this.slots++] = bin[first + k];
+			slotOf[k] = slot;
+		}
+	}
+
+	/** Forgets the neighbourhoods of the last sector; call after the lists are built. */
+	begin(lists: SectorLists): void {
+		this.known.begin(lists.to - lists.from, this.slots + 2);
+	}
+
 	/**
-	 * Adds the shade of table i over the sector's lights that stand at or above the sine `downTo`. Call `setSuns` and
-	 * build the lists first.
+	 * Adds the shade of table i over the sector's lights that stand at or above the sine `downTo`. Call `setSuns`, build
+	 * the lists, and `begin` first.
 	 */
 	add(
 		i: number,
@@ -97,18 +129,42 @@ export class AlikeKernel {
 		const row = i - lists.from;
 		const clearFrom = lists.clearFrom[row];
 		if (clearFrom <= downTo) return;
-		const { first, end, sine, weight, bin } = suns;
+		const { first, end, sine } = suns;
 		if (end <= first || clearFrom <= sine[end - 1]) return;
-		const begin = lists.starts[row];
-		this.gather(i, tables, lists, begin, lists.ends[row * TIERS + TIERS - 1]);
-		const { axes, facing, near, union } = this;
-		const { tierOf, ends } = lists;
+		this.gather(i, tables, lists, row);
+		const { known, slots, slotBin } = this;
+		// An obstacle cuts the lights short: a neighbourhood of its own.
+		const shared = downTo <= sine[end - 1];
+		const at = known.find(shared);
+		if (known.isNew) this.sum(at, group, lists, row, suns, clearFrom, downTo);
+		const { found } = known;
+		sums.share[row] += found[at];
+		sums.shadedSteps[row] += found[at + 1];
+		const lostRow = row * sums.bins;
+		for (let slot = 0; slot < slots; slot++) sums.lost[lostRow + slotBin[slot]] += found[at + 2 + slot];
+	}
+
+	/** Sums one neighbourhood over the sector's lights, into its place among the known ones. */
+	private sum(
+		at: number,
+		group: TableGroup,
+		lists: SectorLists,
+		row: number,
+		suns: SectorSuns,
+		clearFrom: number,
+		downTo: number
+	): void {
+		const { axes, facing, near, union, slotOf } = this;
+		const { tierOf, ends, starts } = lists;
+		const { first, end, sine, weight } = suns;
+		const { found } = this.known;
 		const { halfWidth: w, halfHeight: h, steelHalfWidth: sw, steelHalfHeight: sh } = group;
 		const wide = w + sw;
 		const tall = h + sh;
 		const area = 4 * w * h;
+		const begin = starts[row];
 		union.setSizes(w, h, sw, sh);
-		const lostRow = row * sums.bins;
+		this.sortTiers(lists, row);
 		let shareSum = 0;
 		let shadedSteps = 0;
 		let k = 0;
@@ -124,7 +180,8 @@ export class AlikeKernel {
 			const vz = axes[o + 5];
 			const last = 3 * (ends[row * TIERS + tierOf[k]] - begin);
 			let hits = 0;
-			let { x, y } = union;
+			let firstX = 0;
+			let firstY = 0;
 			for (let c = 0; c < last; c += 3) {
 				const dx = near[c];
 				const dy = near[c + 1];
@@ -134,37 +191,153 @@ export class AlikeKernel {
 				const sy = vx * dx + vy * dy + vz * dz;
 				if (sy >= tall || sy <= -tall) continue;
 				if (axes[o + 6] * dx + axes[o + 7] * dy + axes[o + 8] * dz <= UP_SUN_M) continue;
-				if (hits === x.length) {
-					union.grow();
-					x = union.x;
-					y = union.y;
+				if (hits === 0) {
+					firstX = sx;
+					firstY = sy;
+					hits = 1;
+					continue;
 				}
-				x[hits] = sx;
-				y[hits++] = sy;
+				if (hits === 1) {
+					union.x[0] = firstX;
+					union.y[0] = firstY;
+				}
+				if (hits === union.x.length) union.grow();
+				union.x[hits] = sx;
+				union.y[hits++] = sy;
 			}
 			if (hits === 0) continue;
-			union.measure(hits);
-			const share = union.found[0] < area ? union.found[0] / area : 1;
+			let shaded: number;
+			if (hits === 1) {
+				// Most shaded tables have one shadow: the overlap of two rectangles with parallel sides.
+				const across = wide - Math.abs(firstX);
+				const upright = tall - Math.abs(firstY);
+				shaded = (across < 2 * w ? across : 2 * w) * (upright < 2 * h ? upright : 2 * h);
+			} else {
+				union.measure(hits);
+				shaded = union.found[0];
+			}
+			const share = shaded < area ? shaded / area : 1;
 			if (share <= ANY_SHADE) continue;
 			shareSum += share;
 			shadedSteps++;
-			sums.lost[lostRow + bin[first + k]] += weight[first + k] * facing[k] * share;
+			found[at + 2 + slotOf[k]] += weight[first + k] * facing[k] * share;
 		}
-		sums.share[row] += shareSum;
-		sums.shadedSteps[row] += shadedSteps;
+		found[at] = shareSum;
+		found[at + 1] = shadedSteps;
 	}
 
-	/** Offsets to the neighbours of a table, side by side. */
-	private gather(i: number, tables: ListedTables, lists: SectorLists, begin: number, end: number): void {
+	/** Offsets to the neighbours of a table, rounded, and the key of the neighbourhood. */
+	private gather(i: number, tables: ListedTables, lists: SectorLists, row: number): void {
 		const { east, north, up } = tables;
 		const { items } = lists;
+		const begin = lists.starts[row];
+		const end = lists.ends[row * TIERS + TIERS - 1];
 		if (this.near.length < 3 * (end - begin)) this.near = new Float64Array(6 * (end - begin));
-		const { near } = this;
+		const { near, known } = this;
+		const ei = east[i];
+		const ni = north[i];
+		const ui = up[i];
+		let key1 = end - begin;
+		let key2 = 0;
 		for (let k = begin, c = 0; k < end; k++, c += 3) {
 			const j = items[k];
-			near[c] = east[j] - east[i];
-			near[c + 1] = north[j] - north[i];
-			near[c + 2] = up[j] - up[i];
+			// Adding and taking away 1.5 x 2^22 leaves multiples of 2^-30.
+			const dx = east[j] - ei + ROUNDER - ROUNDER;
+			const dy = north[j] - ni + ROUNDER - ROUNDER;
+			const dz = up[j] - ui + ROUNDER - ROUNDER;
+			near[c] = dx;
+			near[c + 1] = dy;
+			near[c + 2] = dz;
+			// The low 32 bits of each in units of 2^-30 m tell offsets within 4 m apart, the high ones the rest. Sums do not
+			// depend on the order.
+			let mix = Math.imul((dx * UNITS) | 0, 0x9e3779b1) ^ Math.imul((dy * UNITS) | 0, 0x85ebca6b);
+			mix ^= Math.imul((dz * UNITS) | 0, 0xc2b2ae35);
+			mix ^= Math.imul((dx * 4096) | 0, 0x27d4eb2f) + Math.imul((dy * 4096) | 0, 0x165667b1);
+			mix = Math.imul(mix ^ (mix >>> 15), 0x2c1b3c6d);
+			key1 = (key1 + mix) | 0;
+			mix = Math.imul(mix ^ (mix >>> 12) ^ ((dx * UNITS) | 0), 0x297a2d39);
+			key2 = (key2 + (mix ^ (mix >>> 15))) | 0;
 		}
+		known.key1 = key1;
+		known.key2 = key2;
+	}
+
+	/** Neighbours of one tier in the order of their offsets, whatever order the field has them in. */
+	private sortTiers(lists: SectorLists, row: number): void {
+		const { near } = this;
+		let from = 0;
+		for (let t = 0; t < TIERS; t++) {
+			const to = 3 * (lists.ends[row * TIERS + t] - lists.starts[row]);
+			for (let k = from + 3; k < to; k += 3) {
+				const x = near[k];
+				const y = near[k + 1];
+				const z = near[k + 2];
+				let at = k;
+				for (; at > from && (near[at - 3] > x || (near[at - 3] === x && near[at - 2] > y)); at -= 3) {
+					near[at] = near[at - 3];
+					near[at + 1] = near[at - 2];
+					near[at + 2] = near[at - 1];
+				}
+				near[at] = x;
+				near[at + 1] = y;
+				near[at + 2] = z;
+			}
+			from = to;
+		}
+	}
+}
+
+/** Neighbourhoods of one sector that have been summed, found again by two keys of 32 bits each. */
+class KnownNeighbourhoods {
+	key1 = 0;
+	key2 = 0;
+	/** Whether the last `find` made a new place. */
+	isNew = false;
+	/** Sums of each, `width` numbers. */
+	found = new Float64Array(1024);
+	private heads = new Int32Array(16);
+	private keys = new Int32Array(32);
+	private count = 0;
+	private width = 0;
+
+	begin(most: number, width: number): void {
+		let size = 16;
+		while (size < 2 * most) size *= 2;
+		if (this.heads.length < size) {
+			this.heads = new Int32Array(size);
+			this.keys = new Int32Array(2 * size);
+		}
+		this.heads.fill(-1);
+		this.count = 0;
+		this.width = width;
+	}
+
+	/** Where the sums of the neighbourhood with the present keys stand; a new place, set to 0, unless `shared`. */
+	find(shared: boolean): number {
+		const { heads, keys, key1, key2, width } = this;
+		const mask = heads.length - 1;
+		let slot = (key1 ^ (key2 >>> 7)) & mask;
+		if (shared) {
+			while (heads[slot] >= 0) {
+				const entry = heads[slot];
+				if (keys[2 * entry] === key1 && keys[2 * entry + 1] === key2) {
+					this.isNew = false;
+					return entry * width;
+				}
+				slot = (slot + 1) & mask;
+			}
+			heads[slot] = this.count;
+		}
+		const entry = this.count++;
+		keys[2 * entry] = key1;
+		keys[2 * entry + 1] = key2;
+		if ((entry + 1) * width > this.found.length) {
+			const larger = new Float64Array(2 * (entry + 1) * width);
+			larger.set(this.found);
+			this.found = larger;
+		}
+		this.found.fill(0, entry * width, (entry + 1) * width);
+		this.isNew = true;
+		return entry * width;
 	}
 }

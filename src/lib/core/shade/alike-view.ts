@@ -24,6 +24,7 @@ export class AlikeView {
 	private cell = new Int32Array(0);
 	private sortedX = new Float64Array(0);
 	private sortedY = new Float64Array(0);
+	private sortedAhead = new Float64Array(0);
 	private order = new Int32Array(0);
 	private starts = new Int32Array(2);
 	private level: boolean | null = null;
@@ -65,7 +66,7 @@ export class AlikeView {
 		const nz = axes[offset + 8];
 		// On level ground, with the level axis square to the light, whoever falls higher stands behind.
 		const below = this.level && Math.abs(nx * ux + ny * uy) < 1e-12;
-		const { x, y, cell, sortedX, sortedY, order } = this;
+		const { x, y, cell, sortedX, sortedY, sortedAhead, order } = this;
 		let west = Infinity;
 		let east1 = -Infinity;
 		let low = Infinity;
@@ -116,6 +117,7 @@ export class AlikeView {
 			const at = --starts[cell[i]];
 			sortedX[at] = x[i];
 			sortedY[at] = y[i];
+			sortedAhead[at] = nx * east[i] + ny * north[i] + nz * up[i];
 			order[at] = i;
 		}
 		const reach = Math.ceil(tall * perY);
@@ -128,6 +130,7 @@ export class AlikeView {
 				if (i < from || i >= to) continue;
 				const px = sortedX[p];
 				const py = sortedY[p];
+				const limit = sortedAhead[p] + UP_SUN_M;
 				const c = cell[i] - r * columns;
 				let hits = 0;
 				let left = -Infinity;
@@ -140,9 +143,7 @@ export class AlikeView {
 						if (sy <= -tall || sy > 0) continue;
 						const sx = sortedX[k] - px;
 						if (sx >= wide || sx <= -wide) continue;
-						const j = order[k];
-						if (nx * (east[j] - east[i]) + ny * (north[j] - north[i]) + nz * (up[j] - up[i]) <= UP_SUN_M)
-							continue;
+						if (sortedAhead[k] <= limit) continue;
 						if (hits === union.x.length) union.grow();
 						union.x[hits] = sx;
 						union.y[hits++] = sy;
@@ -164,9 +165,7 @@ export class AlikeView {
 							if (sy >= tall || sy <= 0) continue;
 							const sx = sortedX[k] - px;
 							if (sx >= wide || sx <= -wide) continue;
-							const j = order[k];
-							if (nx * (east[j] - east[i]) + ny * (north[j] - north[i]) + nz * (up[j] - up[i]) <= UP_SUN_M)
-								continue;
+							if (sortedAhead[k] <= limit) continue;
 							if (hits === union.x.length) union.grow();
 							union.x[hits] = sx;
 							union.y[hits++] = sy;
@@ -192,7 +191,8 @@ export class AlikeView {
 
 	private size(count: number): void {
 		if (this.x.length >= count) return;
-		for (const name of ['x', 'y', 'sortedX', 'sortedY'] as const) this[name] = new Float64Array(count);
+		for (const name of ['x', 'y', 'sortedX', 'sortedY', 'sortedAhead'] as const)
+			this[name] = new Float64Array(count);
 		this.cell = new Int32Array(count);
 		this.order = new Int32Array(count);
 	}

@@ -1,4 +1,5 @@
 import { RADIANS_PER_DEGREE, tableAxes } from '../conventions';
+import type { Aim } from '../machine/aim';
 import { AlikeView } from './alike-view';
 import { hullOrder } from './hull';
 import { LitPieces, flatArea } from './pieces';
@@ -20,6 +21,8 @@ export interface TableGroup {
 	halfGap: number;
 	/** The middle of the glass is never farther than this from the fixed point, metres. */
 	offsetReach: number;
+	/** Where it points at a sun. */
+	aimAt(azimuthDeg: number, elevationDeg: number): Aim;
 	/** Pose at a sun: bearing, tilt and the way from the fixed point of a table to its middle. */
 	poseAt(azimuthDeg: number, elevationDeg: number): AimedPose;
 }

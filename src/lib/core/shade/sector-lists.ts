@@ -56,6 +56,8 @@ export class SectorLists {
 	starts = new Int32Array(0);
 	/** [table - from]: sine of the elevation from which on nothing blocks it; 0 when nothing ever does. */
 	clearFrom = new Float64Array(0);
+	/** Neighbours in all lists together. */
+	size = 0;
 	/** Highest of them all. */
 	highestClear = 0;
 	from = 0;
@@ -160,6 +162,7 @@ export class SectorLists {
 			for (let k = 0; k < found; k++) items[counts[foundTiers[k]]++] = foundItems[k];
 			size = at;
 		}
+		this.size = size;
 	}
 
 	/** Tiers hold about equal numbers of lights. */
