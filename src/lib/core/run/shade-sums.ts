@@ -1,7 +1,7 @@
 import { AlikeKernel, ANY_SHADE, type SectorSuns, type ShadeSums } from '../shade/alike-kernel';
 import { AlikeView } from '../shade/alike-view';
 import type { ShadeEngine } from '../shade/engine';
-import { SectorLists, type PairReach, type SkySector } from '../shade/sector-lists';
+import { SectorLists, type PairReach } from '../shade/sector-lists';
 import { SolidBounds } from '../shade/solid-bounds';
 import { SECTOR_DEG, SUN_SECTORS, type SunTable } from './sun-table';
 
@@ -16,14 +16,10 @@ export interface FieldSums extends ShadeSums {
 }
 
 /**
- * Below one of these sines of the sun's elevation (2, 5, 9 and 14 degrees) shadows reach so far, or a slope lifts so many
- * tables into the light, that lists of neighbours grow longer than `LONG_LIST` and each light is looked at by itself.
- * Only speed depends on it.
+ * Below this sine of the sun's elevation (1.5 degrees) shadows reach so far that lists of neighbours grow long, and each
+ * light is looked at by itself. Only speed depends on it.
  */
-const LOW_SINES = [0.035, 0.087, 0.156, 0.242];
-const LONG_LIST = 30;
-/** Tables whose lists are tried before those of all are made. */
-const TRIED = 24;
+const LOW_SINE = 0.026;
 
 /** How far the tables of an engine reach for each other: by their sides when all are square to the sun's azimuth. */
 function pairReach({ groups }: ShadeEngine, square: boolean): PairReach {
@@ -111,7 +107,8 @@ class SectorWork {
 		solids.turn(fromDeg, toDeg, suns.sine[end - 1], from, to);
 		const square = this.alike && this.kernel.setSuns({ ...suns, first, end }, engine.groups[0].aimAt);
 		const reach = pairReach(engine, square);
-		const low = this.lowFrom({ fromDeg, toDeg, sines: suns.sine, first, end }, reach);
+		let low = end;
+		while (low > first && suns.sine[low - 1] < LOW_SINE) low--;
 		const high: SectorSuns = { ...suns, first, end: low };
 		if (low > first) {
 			lists.build(engine, reach, { fromDeg, toDeg, sines: suns.sine, first, end: low }, from, to);
@@ -130,23 +127,6 @@ class SectorWork {
 		}
 		for (let k = low; k < end; k++) this.lowLight(k, k - first);
 		if (solids.highest > 0) this.nearSolids(first, end);
-	}
-
-	/** First light of a sector that is better looked at by itself: lists for the lights before it stay short. */
-	private lowFrom(sector: SkySector, reach: PairReach): number {
-		const { engine, lists, suns } = this;
-		const { from, to } = this.sums;
-		const tried = Math.min(to, from + TRIED);
-		let low = sector.end;
-		for (const sine of LOW_SINES) {
-			while (low > sector.first && suns.sine[low - 1] < sine) low--;
-			if (low === sector.first) break;
-			// The middle of the part has neighbours on all sides.
-			const begin = Math.max(from, Math.min(to - TRIED, (from + to - TRIED) >> 1));
-			lists.build(engine, reach, { ...sector, end: low }, begin, Math.min(to, begin + tried - from));
-			if (lists.size <= LONG_LIST * (lists.to - lists.from)) break;
-		}
-		return low;
 	}
 
 	/** What the front of every alike table gets without shade. */

@@ -56,8 +56,6 @@ export class SectorLists {
 	starts = new Int32Array(0);
 	/** [table - from]: sine of the elevation from which on nothing blocks it; 0 when nothing ever does. */
 	clearFrom = new Float64Array(0);
-	/** Neighbours in all lists together. */
-	size = 0;
 	/** Highest of them all. */
 	highestClear = 0;
 	from = 0;
@@ -137,8 +135,9 @@ export class SectorLists {
 						const dz = up[j] - up[i];
 						const bound = highestSine(dx * dx + dy * dy, dz, tall, reach.square ? wide : 0);
 						if (bound <= lowest) continue;
-						let tier = 0;
-						while (tierSine[tier] >= bound) tier++;
+						// From the lowest lights up: most neighbours stand far off.
+						let tier = TIERS - 1;
+						while (tier > 0 && tierSine[tier - 1] < bound) tier--;
 						if (found === this.foundItems.length) this.growFound();
 						this.foundItems[found] = j;
 						this.foundTiers[found++] = tier;
@@ -162,7 +161,6 @@ export class SectorLists {
 			for (let k = 0; k < found; k++) items[counts[foundTiers[k]]++] = foundItems[k];
 			size = at;
 		}
-		this.size = size;
 	}
 
 	/** Tiers hold about equal numbers of lights. */
@@ -294,10 +292,8 @@ function highestSine(level2: number, dz: number, r: number, aside: number): numb
 	const along2 = dz < -r ? level2 : Math.max(0, level2 - aside * aside);
 	const d2 = along2 + dz * dz;
 	if (d2 <= r * r) return 1;
-	const d = Math.sqrt(d2);
-	const sinReach = r / d;
-	const cosReach = Math.sqrt(1 - sinReach * sinReach);
-	const sinRise = dz / d;
-	if (sinRise >= cosReach) return 1;
-	return sinRise * cosReach + (Math.sqrt(along2) / d) * sinReach + SLACK;
+	// sin(p + q) = sin p cos q + cos p sin q with sin p = dz / d, sin q = r / d.
+	const beside = Math.sqrt(d2 - r * r);
+	if (dz >= beside) return 1;
+	return (dz * beside + Math.sqrt(along2) * r) / d2 + SLACK;
 }
