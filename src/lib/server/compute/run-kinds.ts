@@ -11,7 +11,7 @@ import {
 	type ShadeYearPart,
 	type TrackerRange
 } from '../../core';
-import type { MountResult, RunInput, ShadeResult } from '../../core/results';
+import type { MountResult, RunInput } from '../../core/results';
 
 type Progress = (done01: number) => boolean;
 
