@@ -1,10 +1,10 @@
 import {
 	checkLayout,
+	dayOfDate,
 	dayShade,
-	fieldShade,
 	fillPlot,
+	LiveDay,
 	mountYear,
-	moveTracker,
 	prepareField,
 	shadeYear,
 	shortestDate,
@@ -13,7 +13,7 @@ import {
 	type RunInput
 } from '../../src/lib/core';
 import type { Bench } from './bench';
-import { alikeField, emptyPlot, FIELDS, model, place, planted, unlikeField } from './fields';
+import { alikeField, BENCH_YEAR, emptyPlot, FIELDS, model, place, planted, unlikeField } from './fields';
 import { shortestDaySuns } from './suns';
 import { threadFigures } from './threads';
 
@@ -42,13 +42,13 @@ export async function yearFigures(bench: Bench): Promise<void> {
 /** What the page asks for while a tracker is dragged, and the day under the pointer. */
 export function previewFigures(bench: Bench): void {
 	const moved = (count: number): (() => void) => {
-		const field = prepareField(alikeField('regular', count));
 		const suns = shortestDaySuns(100);
+		const day = dayOfDate(shortestDate(place.latitudeDeg, BENCH_YEAR));
+		const live = new LiveDay(prepareField(alikeField('regular', count)), suns, day);
 		let turn = 0;
 		return () => {
 			turn = (turn + 1) % 50;
-			const there = moveTracker(field, count >> 1, 30 + turn / 10, 40);
-			for (const sun of suns) fieldShade(there, sun);
+			live.move(count >> 1, 30 + turn / 10, 40);
 		};
 	};
 	if (bench.wants('moved.regular.500.ms')) bench.milliseconds('moved.regular.500.ms', moved(500));

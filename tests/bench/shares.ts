@@ -12,8 +12,8 @@ import { everySun } from './suns';
 
 export const COUNTS = [10, 100, 1000, 10000] as const;
 
-/** Every k-th sun of the year: thin sets bear more of the lists, so rates on them come out lower than on a whole year. */
-const ALIKE_EVERY = { 10: 1, 100: 1, 1000: 1, 10000: 1 } as const;
+/** Alike tables take every sun of the year, unlike ones every k-th: thin sets bear more of the lists and look slower. */
+const ALIKE_EVERY = 1;
 const UNLIKE_EVERY = { 10: 1, 100: 1, 1000: 5, 10000: 41 } as const;
 /** Quick runs take this many times fewer suns. */
 const QUICK_FEWER = 11;
@@ -21,7 +21,8 @@ const QUICK_FEWER = 11;
 /** Where the sums of a run go: month by hour. */
 const BINS = 288;
 
-const named = (k: number): string => (k > 1 ? `1 sun in ${k}` : '');
+const named = (k: number, suns: number): string =>
+	k > 1 ? `1 sun in ${k} of the year, ${suns} suns` : `every sun of the year, ${suns} suns`;
 
 /** Shade of all tables under all these suns as a year run sums it, its lists of neighbours included. */
 function sharesOf(bench: Bench, name: string, input: () => RunInput, every: number): void {
@@ -32,7 +33,7 @@ function sharesOf(bench: Bench, name: string, input: () => RunInput, every: numb
 	const { engine } = prepareField(input());
 	const repeats = bench.options.quick ? 3 : 5;
 	const work = (): void => void shadeSums(engine, table, BINS);
-	bench.tableSuns(name, engine.count * suns.length, work, named(k), { repeats });
+	bench.tableSuns(name, engine.count * suns.length, work, named(k, suns.length), { repeats });
 }
 
 /** The same asked sun by sun, as pages and previews do. */
@@ -48,7 +49,7 @@ function sunBySun(bench: Bench, name: string, input: () => RunInput, every: numb
 			engine.shares(shares);
 		}
 	};
-	bench.tableSuns(name, engine.count * suns.length, work, named(k));
+	bench.tableSuns(name, engine.count * suns.length, work, named(k, suns.length));
 }
 
 export function sunFigures(bench: Bench): void {
@@ -77,7 +78,7 @@ export function shareFigures(bench: Bench): void {
 	for (const field of FIELDS) {
 		for (const count of countsOf(bench)) {
 			const name = `alike.${field}.${count}.tableSunsPerS`;
-			sharesOf(bench, name, () => alikeField(field, count), ALIKE_EVERY[count]);
+			sharesOf(bench, name, () => alikeField(field, count), ALIKE_EVERY);
 		}
 	}
 	for (const field of FIELDS) {
