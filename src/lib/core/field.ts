@@ -5,7 +5,8 @@ import { prepareSkyline, sunHidden, type PreparedSkyline } from './geometry/skyl
 import { terrainHorizons, type TerrainHorizons } from './geometry/terrain-horizon';
 import { aimOf, type Aim } from './machine/aim';
 import { centreOffset } from './machine/pose';
-import { ShadeEngine, type TableGroup } from './shade/engine';
+import { ShadeEngine } from './shade/engine';
+import type { TableGroup } from './shade/table-group';
 import { obstacleSolids } from './shade/obstacle-solids';
 
 /** A layout on its plot, ready to be asked for shade again and again. Make it once and reuse it between calls. */

@@ -1,6 +1,7 @@
 import type { SkylinePoint } from './document';
 import { prepareSkyline, sunHidden } from './geometry/skyline';
-import { ShadeEngine, type TableGroup } from './shade/engine';
+import { ShadeEngine } from './shade/engine';
+import type { TableGroup } from './shade/table-group';
 import { boxSolid, prismSolid } from './shade/prism-solids';
 import type { Solid } from './shade/solid';
 import type { SunDirection } from './conventions';

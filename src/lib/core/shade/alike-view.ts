@@ -1,9 +1,7 @@
 import { CornerUnion } from './corner-union';
-import type { TableGroup } from './engine';
+import { UP_SUN_M, type TableGroup } from './table-group';
 import type { ListedTables } from './sector-lists';
 
-/** Shaders must stand this far up-sun along the target's normal, metres. */
-const UP_SUN_M = 1e-7;
 /** Wanted number of tables in three cells side by side, most rows that a table looks through, and most cells for each
  * table: only speed depends on them. */
 const TABLES_A_LOOK = 1.5;
