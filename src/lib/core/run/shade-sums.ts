@@ -189,10 +189,10 @@ class SectorWork {
 				sums.without[g * bins + bin] += suns.weight[k] * poses[g].cosine;
 				sums.facingSteps[g]++;
 			}
-			const reached =
-				!listed || engine.horizons !== null || sine < Math.max(lists.highestClear, solids.highest);
-			if (!reached) continue;
+			const skips = listed && engine.horizons === null;
+			if (skips && sine >= Math.max(lists.highestClear, solids.highest)) continue;
 			for (let i = from; i < to; i++) {
+				if (skips && sine >= lists.clearFrom[i - from] && sine >= solids.clearFrom(i - from)) continue;
 				const { cosine } = poses[groupOf[i]];
 				if (cosine <= 0) continue;
 				const share = engine.share(i);
