@@ -16,7 +16,8 @@ const cutOff = (value: number, half: number): number => Math.max(-half, Math.min
 /**
  * The shadows on one table under one sun, kept by who throws them, so that one of them can be left out, taken alone or
  * moved. When its thrower moves, a shadow slides over the table's plane along the sun and keeps its form, so nothing
- * else need be computed again: exact as long as no thrower cuts through the table. Lengths in metres, shares 0..1.
+ * else need be computed again: exact as long as no clip edge of a thrower that crosses the table's plane slides onto the
+ * glass. Lengths in metres, shares 0..1.
  */
 export class ShadowSet {
 	/** Throwers: a table (0..), or an obstacle (-1 - source). */
