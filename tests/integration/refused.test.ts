@@ -1,5 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
-import { emptyLayout, emptyPlot, modelLibrary } from '$lib/schema';
+import { emptyLayout, emptyPlot, modelLibrary, runKindSchema } from '$lib/schema';
 import { allCalls, type OperationId } from '$lib/server/api/table';
 import { stopPool } from '$lib/server/compute/pool';
 import { startJobs, stopJobs } from '$lib/server/jobs';
@@ -205,6 +205,15 @@ describe('who may call', () => {
 			expect(got.body.type).toBe('urn:tiltyard:problem:not-allowed');
 		}
 	);
+
+	it.each(runKindSchema.options)('a run of the kind %s is refused alike', async (kind) => {
+		const path = `/api/v1/projects/${ids.projectId}/runs`;
+		const body = { kind, layoutId: ids.layoutId };
+		const asked = async (token?: string) => (await callApi('POST', path, { token, body })).status;
+		expect(await asked()).toBe(401);
+		expect(await asked(tokens.stranger)).toBe(404);
+		expect(await asked(tokens.client)).toBe(403);
+	});
 
 	it.each((Object.keys(table) as OperationId[]).filter((id) => table[id].client === 'may'))(
 		'%s answers a client of the project',

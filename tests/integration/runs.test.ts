@@ -1,9 +1,10 @@
 import { afterAll, beforeAll, describe, expect, it, vi } from 'vitest';
+import { gzipSync } from 'node:zlib';
 import { eq } from 'drizzle-orm';
 import type { RunEvent } from '$lib/schema';
 import { CORE_VERSION, shadeYear } from '$lib/core';
 import { db } from '$lib/server/db';
-import { runs } from '$lib/server/db/schema';
+import { runResults, runs } from '$lib/server/db/schema';
 import { databaseQueue, LEASE_MS } from '$lib/server/jobs/database-queue';
 import { startJobs, stopJobs } from '$lib/server/jobs';
 import { roundedJson } from '$lib/server/compute/rounded-json';
@@ -96,6 +97,34 @@ describe('a shade run', () => {
 			headers: { 'if-none-match': packed.headers.get('etag')! }
 		});
 		expect(again.status).toBe(304);
+	});
+
+	it('of an older core still opens, and a plan is issued from it', async () => {
+		startJobs();
+		const field = await makeField(2, 1);
+		const done = await until((await ask(field)).body.id, 'done');
+		const path = `/api/v1/runs/${done.id}/result`;
+		const newer = (await callApi('GET', path, { token })).body;
+		// As it was stored before results told their input and before runs could ask for energy.
+		const older = { ...newer, coreVersion: '0.1.0' };
+		delete older.inputHash;
+		delete older.energy;
+		const [{ input }] = await db.select({ input: runs.input }).from(runs).where(eq(runs.id, done.id));
+		expect(input).not.toHaveProperty('energy');
+		await db.update(runs).set({ coreVersion: '0.1.0' }).where(eq(runs.id, done.id));
+		const stored = eq(runResults.runId, done.id);
+		await db.delete(runResults).where(stored);
+		await db.insert(runResults).values({ runId: done.id, part: 0, bytes: gzipSync(JSON.stringify(older)) });
+
+		const opened = await callApi('GET', path, { token });
+		expect(opened.status).toBe(200);
+		expect(opened.body).toEqual(older);
+		expect(await read(done.id)).toMatchObject({ status: 'done', energy: null, coreVersion: '0.1.0' });
+		const plan = await callApi('POST', `/api/v1/projects/${field.projectId}/plans`, {
+			token,
+			body: { layoutId: field.layoutId, reason: 'From an older result' }
+		});
+		expect(plan.status).toBe(201);
 	});
 
 	it('is not computed twice: identical inputs answer the stored run, also after the layout came back', async () => {
