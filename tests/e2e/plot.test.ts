@@ -201,3 +201,55 @@ test('ground, set-back and obstacles are set in exact numbers and drawn', async 
 	await page.reload();
 	await expect(page.getByRole('button', { name: /^Obstacles/ })).toContainText('1');
 });
+
+test('a building and a wall are drawn by their corners, and measured heights are pasted with an error first', async ({
+	page
+}) => {
+	const projectId = await openEmptyPlot(page);
+	await page.getByRole('button', { name: 'Load a sample' }).click();
+	await page.getByRole('button', { name: 'Take this boundary' }).click();
+	const draw = async (verb: string, points: [string, string][], done: string) => {
+		await page.getByRole('button', { name: /^Obstacles/ }).click();
+		await page.getByRole('button', { name: verb }).click();
+		const card = page.getByRole('region', { name: verb });
+		for (const [east, north] of points) {
+			await card.getByLabel('East').fill(east);
+			await card.getByLabel('North').fill(north);
+			await card.getByRole('button', { name: 'Add' }).click();
+		}
+		await card.getByRole('button', { name: done }).click();
+		return page.getByTestId('obstacle-card');
+	};
+	const corners: [string, string][] = [['0', '0'], ['12', '0'], ['12', '8'], ['0', '8']]; // prettier-ignore
+	const building = await draw('Draw a building', corners, 'Close the footprint');
+	await building.getByLabel('Roof').selectOption('pitched');
+	await building.getByLabel('Height to the eaves').fill('4,5');
+	await building.getByLabel('Height to the eaves').press('Enter');
+	await page.getByRole('button', { name: 'All obstacles' }).click();
+	await page.getByRole('button', { name: 'Close' }).first().click();
+	const wall = await draw('Draw a wall or fence', [['-20', '-5'], ['-20', '15']], 'End the line'); // prettier-ignore
+	await wall.getByLabel('Height').fill('500');
+	await wall.getByLabel('Height').press('Enter');
+	await expect(page.getByText(/^Write a value from 0\.01.m to 100.m\.$/)).toBeVisible();
+	await wall.getByLabel('Height').fill('2.2');
+	await wall.getByLabel('Height').press('Enter');
+	await expect.poll(async () => (await storedPlot(page, projectId)).obstacles.map((one) => [one.kind, one.heightM])).toEqual([['building', 4.5], ['wall', 2.2]]); // prettier-ignore
+	await expect(plan(page).locator('[data-obstacle]')).toHaveCount(2);
+
+	await page.getByRole('button', { name: /^Ground/ }).click();
+	await page.getByRole('button', { name: 'Measured' }).click();
+	const heights = page.getByLabel('Heights', { exact: true });
+	const take = page.getByRole('button', { name: 'Take these heights' });
+	await heights.fill('-80 -80 1\n80 -80\n80 80 9\n-80 80 5');
+	await expect(page.getByText('Line 2: 2 values: give east, north and height.')).toBeVisible();
+	await expect(take).toBeDisabled();
+	await expect(heights).toHaveValue(/80 80 9/);
+	await heights.fill('-80 -80 1\n80 -80 5\n80 80 9\n-80 80 5');
+	await expect(page.getByTestId('heights-preview')).toContainText(
+		/4 heights over 160\sm by\s+160\sm, from 1\.0\sm to\s+9\.0\sm/
+	);
+	await take.click();
+	await expect.poll(async () => (await storedPlot(page, projectId)).ground.kind).toBe('points');
+	await expect(page.getByTestId('ground-range')).toContainText('4 heights');
+	expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+});

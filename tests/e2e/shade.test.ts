@@ -109,4 +109,52 @@ test.describe('the shade page', () => {
 		await page.goto(`/projects/${projectId}/sensors`);
 		await expect(page.getByRole('textbox', { name: 'Year' })).toHaveValue('2027');
 	});
+
+	test('adds the energy under a clear sky: losses apart, with their range and their reasons', async ({
+		page
+	}) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId } = await makeSmallField(page);
+		await page.goto(`/projects/${projectId}/shade`);
+		await page.getByLabel('Energy of the year').selectOption('clear');
+		await expect(page.getByRole('textbox', { name: 'Albedo' })).toHaveValue('0.2');
+		await page.getByRole('button', { name: 'Compute the year' }).click();
+		const energy = page.getByTestId('energy-result');
+		await expect(energy).toBeVisible({ timeout: 90_000 });
+		await expect(energy.getByText(/^likely; from \d+\.\d.% by area alone to \d+\.\d.% with the worst/)).toBeVisible(); // prettier-ignore
+		for (const part of ['beam shaded', 'sky covered', 'strings']) {
+			const words = await energy.getByText(new RegExp(`^\\d+\\.\\d+.% ${part}$`)).innerText();
+			expect(parseFloat(words), part).toBeGreaterThan(0);
+		}
+		await energy.getByRole('button', { name: 'As a table: What is lost, and to what' }).click();
+		await expect(energy.getByRole('table', { name: /^Losses apart, tracker by tracker/ })).toContainText(
+			'B03'
+		);
+		expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+		await page.reload();
+		await expect(page.getByTestId('energy-result')).toBeVisible();
+	});
+
+	test('finds who takes whose light, by the keyboard, and tells one tracker apart', async ({ page }) => {
+		await signIn(page, 'designer@tiltyard.test');
+		const { projectId } = await makeSmallField(page);
+		await page.goto(`/projects/${projectId}/shade`);
+		const find = page.getByRole('button', { name: 'Find who takes whose light' });
+		await find.focus();
+		await page.keyboard.press('Enter');
+		const found = page.getByTestId('answers-result');
+		await expect(found).toBeVisible({ timeout: 90_000 });
+		await expect(found.getByText(/^takes \d+\.\d+.% of its year's beam$/)).toBeVisible();
+		const asTable = found.getByRole('button', { name: 'As a table: Who takes whose light' });
+		await asTable.focus();
+		await page.keyboard.press('Enter');
+		const pairs = found.getByRole('table', { name: "The field's strongest pairs" });
+		expect(await pairs.locator('tbody tr').count()).toBeGreaterThan(3);
+		const trackers = found.getByRole('table', { name: /^Who takes light from each tracker/ });
+		await expect(trackers.locator('tbody tr')).toHaveCount(6);
+		await trackers.getByRole('button', { name: 'B02' }).focus();
+		await page.keyboard.press('Enter');
+		await expect(found.getByRole('list', { name: 'Who takes light from B02, most first' })).toBeVisible();
+		expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
+	});
 });
