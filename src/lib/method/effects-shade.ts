@@ -96,6 +96,10 @@ export const shadeEffects = [
 			{
 				what: 'Shadows that overlap belong to nobody alone',
 				howBig: 'removals need not add up to the loss: both are shown'
+			},
+			{
+				what: 'Which way: a neighbour that crosses the plane of a grazed table is not clipped anew when it steps',
+				howBig: 'at most 3 in 10 million of the light, in 400 random fields of tables that stand still'
 			}
 		]
 	}
