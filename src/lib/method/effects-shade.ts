@@ -99,7 +99,8 @@ export const shadeEffects = [
 			},
 			{
 				what: 'Which way: a neighbour that crosses the plane of a grazed table is not clipped anew when it steps',
-				howBig: 'at most 3 in 10 million of the light, in 400 random fields of tables that stand still'
+				howBig:
+					'at most 1 in a million of the light, in 400 random fields, some with a table that stands still'
 			}
 		]
 	}
