@@ -10,7 +10,8 @@ import type { SunStep } from './sun-steps';
 export class LiveDay {
 	/** [sun][tracker] shaded share, 0..1; 1 while the sun is hidden. */
 	readonly shares: Float64Array[];
-	private readonly engine: ShadeEngine;
+	private engine: ShadeEngine;
+	private horizons: Field['horizons'];
 	private readonly hidden: boolean[];
 	private readonly asked: Int32Array;
 
@@ -18,19 +19,11 @@ export class LiveDay {
 	constructor(
 		private readonly field: Field,
 		private readonly suns: readonly Pick<SunStep, 'azimuthDeg' | 'elevationDeg'>[],
-		dayOfYear: number
+		private readonly dayOfYear: number
 	) {
 		const { engine } = field;
-		this.engine = new ShadeEngine(
-			engine.east.slice(),
-			engine.north.slice(),
-			engine.up.slice(),
-			engine.groupOf,
-			engine.groups,
-			engine.solids,
-			field.horizons
-		);
-		this.engine.setDay(dayOfYear);
+		this.horizons = field.horizons;
+		this.engine = this.engineAt(engine.east.slice(), engine.north.slice(), engine.up.slice());
 		this.asked = new Int32Array(engine.count);
 		this.hidden = suns.map((sun) => fieldSunHidden(field, sun));
 		this.shares = suns.map((sun, k) => {
@@ -42,13 +35,30 @@ export class LiveDay {
 		});
 	}
 
+	private engineAt(east: Float64Array, north: Float64Array, up: Float64Array): ShadeEngine {
+		const { groupOf, groups, solids } = this.field.engine;
+		const engine = new ShadeEngine(east, north, up, groupOf, groups, solids, this.horizons);
+		engine.setDay(this.dayOfYear);
+		return engine;
+	}
+
 	/** Moves a tracker of the layout to a plan point, metres, and brings every share up to date; how many were asked. */
 	move(index: number, eastM: number, northM: number): number {
-		const { engine, field, suns, shares, asked } = this;
+		const { field, suns, shares, asked } = this;
 		const tracker = field.layout.trackers[index];
 		const axisM = tracker.axisHeightM ?? field.models[index].axisHeightM;
 		const upM = groundHeightM(field.plot.ground, eastM, northM) + axisM;
-		const before = [engine.east[index], engine.north[index], engine.up[index]] as const;
+		const { east, north, up } = this.engine;
+		const before = [east[index], north[index], up[index]] as const;
+		if (this.horizons) {
+			// The ground about its new place hides other lights from it.
+			east[index] = eastM;
+			north[index] = northM;
+			up[index] = upM;
+			this.horizons = this.horizons.moved(index, east, north, up);
+			this.engine = this.engineAt(east, north, up);
+		}
+		const { engine } = this;
 		let count = 0;
 		for (let k = 0; k < suns.length; k++) {
 			if (this.hidden[k]) continue;

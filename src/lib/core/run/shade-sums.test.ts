@@ -2,8 +2,9 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import type { Obstacle, Tracker } from '../document';
 import { fieldShade, moveTracker, prepareField, type Field } from '../field';
-import { testLayout, testModel, testPlace, testPlot } from '../test-field';
+import { testGrid, testLayout, testTracker, testModel, testPlace, testPlot } from '../test-field';
 import { ANY_SHADE } from '../shade/alike-kernel';
+import { LEAST_COSINE } from '../shade/table-group';
 import { LiveDay } from './live-day';
 import { shadeSums } from './shade-sums';
 import { sunTable, type TableSun } from './sun-table';
@@ -15,19 +16,21 @@ function plainSums(field: Field, suns: readonly TableSun[]) {
 	const { engine } = field;
 	const lost = new Float64Array(engine.count * BINS);
 	const shaded = new Float64Array(engine.count);
+	const shareSum = new Float64Array(engine.count);
 	for (const sun of suns) {
 		engine.setDay(sun.day);
 		engine.setSun(sun.azimuthDeg, sun.elevationDeg, false);
 		for (let i = 0; i < engine.count; i++) {
 			const cosine = engine.cosine(i);
-			if (cosine <= 0) continue;
+			if (cosine <= LEAST_COSINE) continue;
 			const share = engine.share(i);
 			if (share <= ANY_SHADE) continue;
 			lost[i * BINS + sun.bin] += sun.weight * cosine * share;
 			shaded[i]++;
+			shareSum[i] += share;
 		}
 	}
-	return { lost, shaded };
+	return { lost, shaded, share: shareSum };
 }
 
 const sunArbitrary = fc.record({
@@ -156,8 +159,58 @@ describe('sums of shade over many suns', () => {
 					expect(Math.abs(steps - plain.shaded[k])).toBeLessThanOrEqual(1)
 				);
 			}),
-			{ seed: 20261201, numRuns: 150 }
+			{ seed: 20261201, numRuns: 400 }
 		);
+	}, 60_000);
+
+	it('miss no neighbour in any regular grid: the farthest row stands in the last cell of its strip', () => {
+		const suns: TableSun[] = [
+			{ azimuthDeg: 288.79, elevationDeg: 1.6, weight: 1, bin: 0, day: 1 },
+			{ azimuthDeg: 178.75, elevationDeg: 2.6, weight: 1, bin: 1, day: 1 },
+			...Array.from({ length: 12 }, (_, k) => ({
+				azimuthDeg: k * 30 + 0.5,
+				elevationDeg: 1.6 + k * 0.7,
+				weight: 1,
+				bin: k % BINS,
+				day: 1
+			}))
+		];
+		const table = sunTable(suns);
+		for (let columns = 2; columns <= 12; columns++) {
+			for (let rows = 2; rows <= 9; rows++) {
+				for (const pitchM of [16, 20]) {
+					const field = prepareField({
+						place: testPlace,
+						plot: testPlot(),
+						layout: testLayout(testGrid(columns, rows, pitchM, pitchM))
+					});
+					const sums = shadeSums(field.engine, table, BINS);
+					const plain = plainSums(field, suns);
+					plain.lost.forEach((lost, k) =>
+						expect(Math.abs(lost - (sums?.lost[k] ?? NaN)), `${columns} x ${rows}`).toBeLessThan(1e-7)
+					);
+				}
+			}
+		}
+	}, 60_000);
+
+	it('do not take one neighbourhood for another that has the same key', () => {
+		// A thousand pairs far apart, each with an offset of its own.
+		let state = 7;
+		const random = () => {
+			state = (state * 48271) % 2147483647;
+			return state / 2147483647;
+		};
+		const trackers: Tracker[] = [];
+		for (let k = 0; k < 1000; k++) {
+			trackers.push(testTracker(2 * k, k * 4096, 0), testTracker(2 * k + 1, k * 4096, -11 - random() * 2));
+		}
+		const layout = testLayout(trackers);
+		const field = prepareField({ place: testPlace, plot: testPlot(), layout });
+		const suns: TableSun[] = [{ azimuthDeg: 180.5, elevationDeg: 7, weight: 1, bin: 0, day: 1 }];
+		const sums = shadeSums(field.engine, sunTable(suns), BINS);
+		const plain = plainSums(field, suns);
+		plain.lost.forEach((lost, k) => expect(Math.abs(lost - (sums?.lost[k] ?? NaN))).toBeLessThan(1e-7));
 	}, 60_000);
 
 	it('of a part are the same numbers as in the whole', () => {

@@ -3,6 +3,7 @@ import { AlikeView } from '../shade/alike-view';
 import type { ShadeEngine } from '../shade/engine';
 import { SectorLists, type PairReach } from '../shade/sector-lists';
 import { SolidBounds } from '../shade/solid-bounds';
+import { LEAST_COSINE } from '../shade/table-group';
 import { SECTOR_DEG, SUN_SECTORS, type SunTable } from './sun-table';
 
 /** Shade of some tables, summed over many suns. */
@@ -185,7 +186,7 @@ class SectorWork {
 			const sine = suns.sine[k];
 			const bin = suns.bin[k];
 			for (let g = 0; g < groups.length; g++) {
-				if (poses[g].cosine <= 0) continue;
+				if (poses[g].cosine <= LEAST_COSINE) continue;
 				sums.without[g * bins + bin] += suns.weight[k] * poses[g].cosine;
 				sums.facingSteps[g]++;
 			}
@@ -194,7 +195,7 @@ class SectorWork {
 			for (let i = from; i < to; i++) {
 				if (skips && sine >= lists.clearFrom[i - from] && sine >= solids.clearFrom(i - from)) continue;
 				const { cosine } = poses[groupOf[i]];
-				if (cosine <= 0) continue;
+				if (cosine <= LEAST_COSINE) continue;
 				const share = engine.share(i);
 				if (share > ANY_SHADE) this.add(i - from, bin, suns.weight[k] * cosine, share);
 			}

@@ -2,12 +2,11 @@ import type { Aim } from '../machine/aim';
 import { LEAST_COSINE, UP_SUN_M, type TableGroup } from './table-group';
 import { CornerUnion } from './corner-union';
 import { KnownNeighbourhoods } from './known-neighbourhoods';
-import { TIERS, type ListedTables, type SectorLists } from './sector-lists';
+import { OFFSET_ROUNDER, TIERS, type ListedTables, type SectorLists } from './sector-lists';
 import { sunVector, tableAxes } from '../conventions';
 
-/** Offsets are rounded to 1 / UNITS metres by adding and taking away ROUNDER; good for fields of up to 2,000 km. */
+/** Offsets are whole numbers of 1 / UNITS metres. */
 const UNITS = 2 ** 30;
-const ROUNDER = 1.5 * 2 ** 22;
 
 /** Lights of one sector and what is summed over them. */
 export interface SectorSuns {
@@ -47,8 +46,11 @@ export class AlikeKernel {
 	private facing = new Float64Array(0);
 	/** Offsets to the neighbours of one table, side by side. */
 	private near = new Float64Array(3 * 256);
+	/** A mix of the bits of each offset. */
+	private mixes = new Int32Array(256);
 	private readonly union = new CornerUnion();
 	private readonly known = new KnownNeighbourhoods();
+	private readonly ends = new Int32Array(TIERS);
 	/** Bins that the sector's lights fall into, and the place of each light's among them. */
 	private slotBin = new Int32Array(0);
 	private slotOf = new Uint16Array(0);
@@ -132,8 +134,13 @@ export class AlikeKernel {
 		const { known, slots, slotBin } = this;
 		// An obstacle cuts the lights short: a neighbourhood of its own.
 		const shared = downTo <= sine[end - 1];
-		const at = known.find(shared);
-		if (known.isNew) this.sum(at, group, lists, row, suns, clearFrom, downTo);
+		const tierEnds = this.tierEnds(lists, row);
+		const at = known.find(shared, this.near, this.mixes, tierEnds);
+		if (known.isNew) {
+			this.sortTiers(tierEnds);
+			known.keep(this.near, this.mixes, tierEnds);
+			this.sum(at, group, lists, suns, clearFrom, downTo);
+		}
 		const { found } = known;
 		sums.share[row] += found[at];
 		sums.shadedSteps[row] += found[at + 1];
@@ -146,22 +153,19 @@ export class AlikeKernel {
 		at: number,
 		group: TableGroup,
 		lists: SectorLists,
-		row: number,
 		suns: SectorSuns,
 		clearFrom: number,
 		downTo: number
 	): void {
-		const { axes, facing, near, union, slotOf } = this;
-		const { tierOf, ends, starts } = lists;
+		const { axes, facing, near, union, slotOf, ends } = this;
+		const { tierOf } = lists;
 		const { first, end, sine, weight } = suns;
 		const { found } = this.known;
 		const { halfWidth: w, halfHeight: h, steelHalfWidth: sw, steelHalfHeight: sh } = group;
 		const wide = w + sw;
 		const tall = h + sh;
 		const area = 4 * w * h;
-		const begin = starts[row];
 		union.setSizes(w, h, sw, sh);
-		this.sortTiers(lists, row);
 		let shareSum = 0;
 		let shadedSteps = 0;
 		let k = 0;
@@ -175,7 +179,7 @@ export class AlikeKernel {
 			const vx = axes[o + 3];
 			const vy = axes[o + 4];
 			const vz = axes[o + 5];
-			const last = 3 * (ends[row * TIERS + tierOf[k]] - begin);
+			const last = 3 * ends[tierOf[k]];
 			let hits = 0;
 			let firstX = 0;
 			let firstY = 0;
@@ -229,57 +233,72 @@ export class AlikeKernel {
 		const { items } = lists;
 		const begin = lists.starts[row];
 		const end = lists.ends[row * TIERS + TIERS - 1];
-		if (this.near.length < 3 * (end - begin)) this.near = new Float64Array(6 * (end - begin));
-		const { near, known } = this;
+		if (this.mixes.length < end - begin) {
+			this.near = new Float64Array(6 * (end - begin));
+			this.mixes = new Int32Array(2 * (end - begin));
+		}
+		const { near, mixes, known } = this;
 		const ei = east[i];
 		const ni = north[i];
 		const ui = up[i];
-		let key1 = end - begin;
-		let key2 = 0;
+		let key = end - begin;
 		for (let k = begin, c = 0; k < end; k++, c += 3) {
 			const j = items[k];
-			// Adding and taking away 1.5 x 2^22 leaves multiples of 2^-30.
-			const dx = east[j] - ei + ROUNDER - ROUNDER;
-			const dy = north[j] - ni + ROUNDER - ROUNDER;
-			const dz = up[j] - ui + ROUNDER - ROUNDER;
+			const dx = east[j] - ei + OFFSET_ROUNDER - OFFSET_ROUNDER;
+			const dy = north[j] - ni + OFFSET_ROUNDER - OFFSET_ROUNDER;
+			const dz = up[j] - ui + OFFSET_ROUNDER - OFFSET_ROUNDER;
 			near[c] = dx;
 			near[c + 1] = dy;
 			near[c + 2] = dz;
-			// The low 32 bits of each in units of 2^-30 m tell offsets within 4 m apart, the high ones the rest. Sums do not
-			// depend on the order.
+			// A key that does not depend on the order; what it finds is compared offset by offset.
 			let mix = Math.imul((dx * UNITS) | 0, 0x9e3779b1) ^ Math.imul((dy * UNITS) | 0, 0x85ebca6b);
 			mix ^= Math.imul((dz * UNITS) | 0, 0xc2b2ae35);
-			mix ^= Math.imul((dx * 4096) | 0, 0x27d4eb2f) + Math.imul((dy * 4096) | 0, 0x165667b1);
 			mix = Math.imul(mix ^ (mix >>> 15), 0x2c1b3c6d);
-			key1 = (key1 + mix) | 0;
-			mix = Math.imul(mix ^ (mix >>> 12) ^ ((dx * UNITS) | 0), 0x297a2d39);
-			key2 = (key2 + (mix ^ (mix >>> 15))) | 0;
+			mix ^= mix >>> 13;
+			mixes[k - begin] = mix;
+			key = (key + mix) | 0;
 		}
-		known.key1 = key1;
-		known.key2 = key2;
+		known.key = key;
+	}
+
+	/** Where each tier of a table's neighbours ends in `near`, in neighbours. */
+	private tierEnds(lists: SectorLists, row: number): Int32Array {
+		const { ends } = this;
+		for (let t = 0; t < TIERS; t++) ends[t] = lists.ends[row * TIERS + t] - lists.starts[row];
+		return ends;
 	}
 
 	/** Neighbours of one tier in the order of their offsets, whatever order the field has them in. */
-	private sortTiers(lists: SectorLists, row: number): void {
-		const { near } = this;
+	private sortTiers(ends: Int32Array): void {
+		const { near, mixes } = this;
 		let from = 0;
 		for (let t = 0; t < TIERS; t++) {
-			const to = 3 * (lists.ends[row * TIERS + t] - lists.starts[row]);
+			const to = 3 * ends[t];
 			for (let k = from + 3; k < to; k += 3) {
 				const x = near[k];
 				const y = near[k + 1];
 				const z = near[k + 2];
+				const mix = mixes[k / 3];
 				let at = k;
-				for (; at > from && (near[at - 3] > x || (near[at - 3] === x && near[at - 2] > y)); at -= 3) {
+				for (; at > from && comesBefore(x, y, z, near, at - 3); at -= 3) {
 					near[at] = near[at - 3];
 					near[at + 1] = near[at - 2];
 					near[at + 2] = near[at - 1];
+					mixes[at / 3] = mixes[at / 3 - 1];
 				}
 				near[at] = x;
 				near[at + 1] = y;
 				near[at + 2] = z;
+				mixes[at / 3] = mix;
 			}
 			from = to;
 		}
 	}
+}
+
+/** Whether an offset comes before the one at a place: by east, then north, then up. */
+function comesBefore(x: number, y: number, z: number, offsets: Float64Array, at: number): boolean {
+	if (x !== offsets[at]) return x < offsets[at];
+	if (y !== offsets[at + 1]) return y < offsets[at + 1];
+	return z < offsets[at + 2];
 }

@@ -35,8 +35,14 @@ export interface SkySector {
 export const TIERS = 16;
 /** A strip of plan is never shorter than this in buckets along the light; only speed depends on it. */
 const MOST_CELLS_A_TABLE = 4;
+/** Cells are looked through so much farther than they need be, metres: sums of coordinates are rounded. */
+const EDGE_M = 1e-6;
+/** Offsets between tables are rounded to 2^-30 m by adding and taking away 1.5 x 2^22; good up to 2,000 km. */
+export const OFFSET_ROUNDER = 1.5 * 2 ** 22;
 /** Kept clear of rounding: a bound is raised by this much, sine. */
-const SLACK = 1e-9;
+export const SLACK = 1e-9;
+/** Bound of what may stand before a light in the zenith: above every sine. */
+export const OVER = 1 + SLACK;
 
 /**
  * Who can shade whom while the light stands in one sector of azimuth: for each table the neighbours that can reach it,
@@ -102,20 +108,21 @@ export class SectorLists {
 			const tallest = reach.upright[g] + grid.tallest;
 			// (rise + r) / d bounds the sine for what rises ahead, r / d for what does not.
 			const rise = Math.max(0, grid.top - up[i]);
-			const far = Math.min(grid.alongTo - pi, lowest > 0 ? (rise + tallest) / lowest + widest : Infinity);
+			const far =
+				EDGE_M + Math.min(grid.alongTo - pi, lowest > 0 ? (rise + tallest) / lowest + widest : Infinity);
 			// A neighbour that stands higher may reach over from a little behind.
 			const behind = widest + tallest;
 			let found = 0;
 			let clear = 0;
 			counts.fill(0);
 			if (far > -behind) {
-				const reachAcross = widest + Math.max(0, far) * spread;
+				const reachAcross = widest + Math.max(0, far) * spread + EDGE_M;
 				const s0 = grid.strip(qi - reachAcross);
 				const s1 = grid.strip(qi + reachAcross);
 				const lastBucket = grid.bucket(pi + far);
 				for (let s = s0; s <= s1; s++) {
 					const gap = grid.gapTo(s, qi) - widest;
-					const begin = gap > 0 ? (spread > 0 ? gap / spread : Infinity) : -behind;
+					const begin = gap > 0 ? (spread > 0 ? gap / spread - EDGE_M : Infinity) : -behind;
 					if (begin > far) continue;
 					const firstCell = s * grid.buckets + grid.bucket(pi + begin);
 					const endCell = s * grid.buckets + lastBucket;
@@ -130,9 +137,9 @@ export class SectorLists {
 						const limit = wide + Math.abs(t) * spread;
 						if (q >= limit || -q >= limit || t <= -behind) continue;
 						const tall = reach.upright[g] + reach.upright[h];
-						const dx = east[j] - east[i];
-						const dy = north[j] - north[i];
-						const dz = up[j] - up[i];
+						const dx = east[j] - east[i] + OFFSET_ROUNDER - OFFSET_ROUNDER;
+						const dy = north[j] - north[i] + OFFSET_ROUNDER - OFFSET_ROUNDER;
+						const dz = up[j] - up[i] + OFFSET_ROUNDER - OFFSET_ROUNDER;
 						const bound = highestSine(dx * dx + dy * dy, dz, tall, reach.square ? wide : 0);
 						if (bound <= lowest) continue;
 						// From the lowest lights up: most neighbours stand far off.
@@ -291,9 +298,9 @@ class StripGrid {
 function highestSine(level2: number, dz: number, r: number, aside: number): number {
 	const along2 = dz < -r ? level2 : Math.max(0, level2 - aside * aside);
 	const d2 = along2 + dz * dz;
-	if (d2 <= r * r) return 1;
+	if (d2 <= r * r) return OVER;
 	// sin(p + q) = sin p cos q + cos p sin q with sin p = dz / d, sin q = r / d.
 	const beside = Math.sqrt(d2 - r * r);
-	if (dz >= beside) return 1;
+	if (dz >= beside) return OVER;
 	return (dz * beside + Math.sqrt(along2) * r) / d2 + SLACK;
 }

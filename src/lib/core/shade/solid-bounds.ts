@@ -1,5 +1,6 @@
 import { RADIANS_PER_DEGREE } from '../conventions';
 import type { ShadeEngine } from './engine';
+import { OVER, SLACK } from './sector-lists';
 
 /**
  * Up to which light obstacles can reach each table while the light stands in a sector of azimuth: by the balls that
@@ -74,7 +75,7 @@ export class SolidBounds {
 				const sinReach = r / d;
 				const cosReach = Math.sqrt(Math.max(0, 1 - sinReach * sinReach));
 				const over = d <= r || dz / d >= cosReach;
-				const sine = over ? 1 : (dz / d) * cosReach + (Math.hypot(dx, dy) / d) * sinReach + 1e-9;
+				const sine = over ? OVER : (dz / d) * cosReach + (Math.hypot(dx, dy) / d) * sinReach + SLACK;
 				if (sine > bound) bound = sine;
 			}
 			this.sines[i - from] = bound > lowest ? bound : 0;

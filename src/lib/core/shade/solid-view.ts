@@ -32,6 +32,12 @@ export class SolidView {
 		solids: readonly Solid[],
 		private readonly buffer: ShadowBuffer
 	) {
+		for (const { vertices } of solids) {
+			if (vertices.length > 3 * MOST_SHADOW_CORNERS)
+				throw new Error(
+					`A body has ${vertices.length / 3} corners; at most ${MOST_SHADOW_CORNERS} are possible`
+				);
+		}
 		// Opaque ones first: what they take need not be cut again by a crown.
 		this.solids = [...solids].sort((a, b) => a.passes - b.passes);
 		this.boxes = new Float64Array(4 * solids.length);
