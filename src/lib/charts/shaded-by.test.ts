@@ -73,16 +73,47 @@ describe('who shades a tracker', () => {
 			]
 		};
 		const beside = prepareField({ place, plot, layout });
-		expect(obstacleCastersOf(beside, 2, low)).toEqual(['Barn']);
+		expect(obstacleCastersOf(beside, 2, low, 355)).toEqual(['Barn']);
 		expect(castersOf(beside, 2, low)).toEqual([]);
-		expect(obstacleCastersOf(field, 2, low)).toEqual([]);
+		expect(obstacleCastersOf(field, 2, low, 355)).toEqual([]);
 		// From the east the barn shades the eastern one alone, from the west the middle one does.
-		expect(dayCauses(beside, 2, [low])).toEqual(['Barn']);
-		expect(dayCauses(beside, 2, [{ azimuthDeg: 270, elevationDeg: 5 }])[0]).toBe('middle');
-		expect(new Set(dayCauses(beside, 2, [low, { azimuthDeg: 270, elevationDeg: 5 }]))).toEqual(
+		expect(dayCauses(beside, 2, [low], 355)).toEqual(['Barn']);
+		expect(dayCauses(beside, 2, [{ azimuthDeg: 270, elevationDeg: 5 }], 355)[0]).toBe('middle');
+		expect(new Set(dayCauses(beside, 2, [low, { azimuthDeg: 270, elevationDeg: 5 }], 355))).toEqual(
 			new Set(['Barn', 'middle', 'west'])
 		);
-		expect(dayCauses(beside, 2, [{ azimuthDeg: 90, elevationDeg: -5 }])).toEqual([]);
+		expect(dayCauses(beside, 2, [{ azimuthDeg: 90, elevationDeg: -5 }], 355)).toEqual([]);
+	});
+
+	it('sees a tree in leaf or bare by the day of the year', () => {
+		const plot: Plot = {
+			...emptyPlot(),
+			obstacles: [
+				{
+					id: 'o1',
+					kind: 'tree',
+					name: 'Lime',
+					eastM: 45,
+					northM: 0,
+					heightM: 12,
+					crownBaseM: 0,
+					crownRadiusM: 6,
+					trunkRadiusM: 0,
+					crownTransmission: 1,
+					leafTransmission: 0.1,
+					growthMPerYear: 0,
+					maxHeightM: 12,
+					crownShape: 'cylinder'
+				}
+			]
+		};
+		const beside = prepareField({ place, plot, layout });
+		const low = { azimuthDeg: 90, elevationDeg: 5 };
+		// Bare, this invented crown lets all light through: only in leaf does it shade.
+		expect(obstacleCastersOf(beside, 2, low, 172)).toEqual(['Lime']);
+		expect(obstacleCastersOf(beside, 2, low, 355)).toEqual([]);
+		expect(dayCauses(beside, 2, [low], 172)).toEqual(['Lime']);
+		expect(dayCauses(beside, 2, [low], 355)).toEqual([]);
 	});
 
 	it('blames nobody at night, behind the skyline or for a table with its back to the sun', () => {

@@ -25,9 +25,11 @@ export function castersOf(field: Field, target: number, sun: Sun): number[] {
 	return casters(field, target, sun).map((caster) => caster.index);
 }
 
-/** Names of the obstacles that shade one tracker's table at a moment, most first, each tried alone. */
-export function obstacleCastersOf(field: Field, target: number, sun: Sun): string[] {
-	return obstacleCasters(field, target, sun).map((caster) => field.plot.obstacles[caster.index].name);
+/** Names of the obstacles that shade one tracker's table at a moment of a day of the year (1..366), most first, each tried alone. */
+export function obstacleCastersOf(field: Field, target: number, sun: Sun, dayOfYear: number): string[] {
+	return obstacleCasters(field, target, sun, dayOfYear).map(
+		(caster) => field.plot.obstacles[caster.index].name
+	);
 }
 
 /** Fields above this many trackers are asked at one moment only, to keep the page quick. */
@@ -36,22 +38,27 @@ const samples = 12;
 
 /**
  * Who shades one tracker over some moments of a day, as tags and obstacle names: by the shade that each throws alone,
- * most first. `moments` are suns, the worst first.
+ * most first. `moments` are suns, the worst first; trees stand as on `dayOfYear`, 1..366.
  */
-export function dayCauses(field: Field, target: number, moments: readonly Sun[]): string[] {
+export function dayCauses(
+	field: Field,
+	target: number,
+	moments: readonly Sun[],
+	dayOfYear: number
+): string[] {
 	const taken = moments.slice(0, field.layout.trackers.length > sampledFieldsTo ? 1 : samples);
 	const sums = new Map<string, number>();
 	const add = (name: string, share: number) => sums.set(name, (sums.get(name) ?? 0) + share);
 	for (const sun of taken) {
 		for (const { index, share } of casters(field, target, sun)) add(field.layout.trackers[index].tag, share);
-		for (const { index, share } of obstacleCasters(field, target, sun)) {
+		for (const { index, share } of obstacleCasters(field, target, sun, dayOfYear)) {
 			add(field.plot.obstacles[index].name, share);
 		}
 	}
 	return [...sums].sort((a, b) => b[1] - a[1]).map(([name]) => name);
 }
 
-function obstacleCasters(field: Field, target: number, sun: Sun): Caster[] {
+function obstacleCasters(field: Field, target: number, sun: Sun, dayOfYear: number): Caster[] {
 	const tracker = field.layout.trackers[target];
 	if (!tracker || fieldSunHidden(field, sun) || noSunWords(field, target, sun) !== null) return [];
 	const { place, plot, treeYears } = field;
@@ -62,7 +69,7 @@ function obstacleCasters(field: Field, target: number, sun: Sun): Caster[] {
 			layout: { ...field.layout, trackers: [tracker] },
 			treeYears
 		});
-		return { index, share: fieldShade(alone, sun)[0] };
+		return { index, share: fieldShade(alone, sun, dayOfYear)[0] };
 	});
 	return found.filter((caster) => caster.share > 1e-9).sort((a, b) => b.share - a.share);
 }
