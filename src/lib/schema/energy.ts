@@ -15,6 +15,32 @@ const hourly = z
 	.array(quantity(0, 2000, 'W/m²').nullable(), { error: 'Give one value for each hour, or null.' })
 	.max(MOST_HOURS, { error: `Give at most ${MOST_HOURS} hours.` });
 
+/**
+ * Hours that two spans share would be counted twice. The months of a typical year come from different years, so a span may
+ * well lie before the one that is listed ahead of it.
+ */
+function refuseDoubledHours(
+	spans: readonly { startMs: number; hours: number }[],
+	context: z.core.$RefinementCtx
+): void {
+	const hourMs = 3600000;
+	const end = (k: number) => spans[k].startMs + spans[k].hours * hourMs;
+	const order = spans.map((_, k) => k).sort((a, b) => spans[a].startMs - spans[b].startMs || a - b);
+	/** The one so far that ends last. */
+	let longest = order[0];
+	for (const now of order.slice(1)) {
+		if (spans[now].startMs < end(longest)) {
+			const [first, second] = [Math.min(longest, now), Math.max(longest, now)];
+			context.addIssue({
+				code: 'custom',
+				path: [second],
+				message: `These hours overlap those of spans.${first}. Give every hour once: start each run of hours at or after the end of the one before it in time.`
+			});
+		}
+		if (end(now) > end(longest)) longest = now;
+	}
+}
+
 export const energySkySchema = z.discriminatedUnion(
 	'source',
 	[
@@ -42,7 +68,8 @@ export const energySkySchema = z.discriminatedUnion(
 					{ error: 'Give the runs of hours without a gap as a list.' }
 				)
 				.min(1, { error: 'Give at least one run of hours.' })
-				.max(400, { error: 'Give at most 400 runs of hours.' }),
+				.max(400, { error: 'Give at most 400 runs of hours.' })
+				.superRefine(refuseDoubledHours),
 			ghi: hourly,
 			dni: hourly,
 			dhi: hourly
