@@ -13,6 +13,10 @@ export const placeEffects = [
 				what: 'A table counts as hidden by ground or not with its middle',
 				howBig: 'minutes a day on steep land'
 			},
+			{
+				what: 'Ground beyond the measured outline is held at the height of its edge and hides no sun',
+				howBig: 'all of a slope that was not measured: measure beyond the field, or enter it as skyline'
+			},
 			{ what: 'Curvature and refraction along the ground', howBig: '0.002° at 500 m' }
 		]
 	},

@@ -35,6 +35,10 @@ export const notModelled: readonly Neglected[] = [
 		what: 'The blurred edge of a shadow, where light is counted',
 		howBig: 'its mean is exact; cells in half shade count as lit or shaded by area'
 	},
+	{
+		what: 'Ground outside the measured outline, also under a tracker that stands there',
+		howBig: 'held at the height of the edge and hides no sun: enter what rises there as skyline'
+	},
 	{ what: 'Errors of the survey', howBig: 'usually the largest of all: 0.3 m of height is 0.7° at 25 m' },
 	{ what: 'Any maker’s controller', howBig: 'behaviour is asked for; what is not asked is not known' }
 ];
