@@ -42,11 +42,17 @@ export const sectorOf = (azimuthDeg: number): number =>
 export function sunTable(suns: readonly TableSun[]): SunTable {
 	const count = suns.length;
 	const sector = Int32Array.from(suns, (sun) => sectorOf(sun.azimuthDeg));
-	const order = Int32Array.from(suns, (_, k) => k);
-	order.sort((a, b) => sector[a] - sector[b] || suns[b].elevationDeg - suns[a].elevationDeg || a - b);
 	const sectorStart = new Int32Array(SUN_SECTORS + 1);
 	for (const s of sector) sectorStart[s + 1]++;
 	for (let s = 0; s < SUN_SECTORS; s++) sectorStart[s + 1] += sectorStart[s];
+	const next = sectorStart.slice();
+	const order = new Int32Array(count);
+	for (let k = 0; k < count; k++) order[next[sector[k]]++] = k;
+	for (let s = 0; s < SUN_SECTORS; s++) {
+		order
+			.subarray(sectorStart[s], sectorStart[s + 1])
+			.sort((a, b) => suns[b].elevationDeg - suns[a].elevationDeg || a - b);
+	}
 	const elevationDeg = Float64Array.from(order, (k) => suns[k].elevationDeg);
 	return {
 		count,
