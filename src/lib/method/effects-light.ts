@@ -103,7 +103,11 @@ export const lightEffects = [
 			'Crossed strings: Hottel 1954 (from memory)'
 		],
 		neglected: [
-			{ what: 'Sum over directions and reading between suns', howBig: '5 % of the sky that is lost' },
+			{
+				what: 'Sum over directions and reading between suns',
+				howBig:
+					'5 % of the sky that is lost, or 0.5 % of the sky where that is more: 0.03 points of a clear year'
+			},
 			{ what: 'What dark glass in between shines back', howBig: 'some percent of what it covers' }
 		]
 	},

@@ -62,7 +62,7 @@ export interface SkyView {
  * Sky views of tables `from` to `to` while all stand as for a sun. From each direction of the sky the exact shaded share of
  * each table is asked, as if the sun's light came from there, and summed with cos of incidence and solid angle. Divided by
  * the same sum for a bare table, so that a table alone has exactly (1 + cos tilt) / 2 times its share; error of the sum
- * over directions: `SKY_VIEW_ERROR`. What the tables in between shine back is neglected: dark glass returns some
+ * over directions: `SKY_VIEW_ERROR`, or `SKY_VIEW_LEAST_ERROR` where that is more. What the tables in between shine back is neglected: dark glass returns some
  * percent of what it covers.
  */
 export function skyView(
