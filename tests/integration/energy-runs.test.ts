@@ -90,6 +90,15 @@ describe('a shade run with energy', () => {
 		expect(await path({ sky: { source: 'average', monthlyHorizontalKwhM2: sums.slice(1) } })).toBe(
 			'energy.sky.monthlyHorizontalKwhM2'
 		);
+		const sky = (monthlyHorizontalKwhM2: unknown[]) => ({
+			sky: { source: 'average', monthlyHorizontalKwhM2 }
+		});
+		const thirteen = await errors(sky([...sums, 40]));
+		expect(thirteen.map((error) => error.path)).toEqual(['energy.sky.monthlyHorizontalKwhM2']);
+		expect(thirteen[0].message).toMatch(/twelve/);
+		expect(await path(sky(sums.map((sum, month) => (month === 4 ? null : sum))))).toBe(
+			'energy.sky.monthlyHorizontalKwhM2.4'
+		);
 		const tooMuch = await errors({
 			sky: { source: 'average', monthlyHorizontalKwhM2: sums.map((sum) => sum + 150) }
 		});

@@ -215,6 +215,23 @@ describe('who may call', () => {
 		expect(await asked(tokens.client)).toBe(403);
 	});
 
+	it.each([
+		['answers', { kind: 'answers' }],
+		['energy of a clear sky', { kind: 'shade', energy: { sky: { source: 'clear' } } }],
+		[
+			'energy of monthly sums',
+			{ kind: 'shade', energy: { sky: { source: 'average', monthlyHorizontalKwhM2: Array(12).fill(100) } } }
+		]
+	])('a run of %s finds nothing for a stranger and is refused to a client', async (_name, request) => {
+		const path = `/api/v1/projects/${ids.projectId}/runs`;
+		const body = { layoutId: ids.layoutId, ...request };
+		expect((await callApi('POST', path, { body })).status).toBe(401);
+		const stranger = await callApi('POST', path, { token: tokens.stranger, body });
+		expect(stranger.status).toBe(404);
+		expect(stranger.body.detail).toBe('There is nothing at this address, or it is not yours to see.');
+		expect((await callApi('POST', path, { token: tokens.client, body })).status).toBe(403);
+	});
+
 	it.each((Object.keys(table) as OperationId[]).filter((id) => table[id].client === 'may'))(
 		'%s answers a client of the project',
 		async (id) => {
