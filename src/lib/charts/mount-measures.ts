@@ -40,6 +40,8 @@ function classOfMeasure(place: MountPlaceResult, key: (typeof MOUNT_MEASURES)[nu
 
 const meanings: Record<string, string> = {
 	blindHours: 'the head, the eye of the sensor, in shade',
+	longestRunMinutes: 'the head in shade without a break, sun above 3°, whether its table is lit or not',
+	longestBlindMinutes: 'the head in shade without a break while its table is lit, any height of the sun',
 	runUpWorstMinutes: 'run-up: from the first sun on the table until the head has it'
 };
 
@@ -65,7 +67,7 @@ export function measuresOf(place: MountPlaceResult): MeasureRow[] {
 	const told = (key: string, label: string, value: string): MeasureRow => ({
 		key,
 		label,
-		meaning: '',
+		meaning: meanings[key] ?? '',
 		value,
 		class: null,
 		clear: '',

@@ -19,8 +19,15 @@ export const mountColumns: Column<TrackerMounts>[] = [
 		text: (row) => row.common.blindHours.toFixed(1)
 	},
 	{
+		key: 'blindRun',
+		label: 'Longest blind run, any sun',
+		unit: 'min',
+		align: 'right',
+		value: (row) => Math.round(row.common.longestBlindMinutes)
+	},
+	{
 		key: 'run',
-		label: 'Longest run',
+		label: 'Longest shade, sun above 3°',
 		unit: 'min',
 		align: 'right',
 		value: (row) => Math.round(row.common.longestRunMinutes)
@@ -76,8 +83,15 @@ export const placeColumns: Column<PlaceRow>[] = [
 		text: (row) => row.place.shadedHours.toFixed(1)
 	},
 	{
+		key: 'blindRun',
+		label: 'Longest blind run, any sun',
+		unit: 'min',
+		align: 'right',
+		value: (row) => Math.round(row.place.longestBlindMinutes)
+	},
+	{
 		key: 'run',
-		label: 'Longest run',
+		label: 'Longest shade, sun above 3°',
 		unit: 'min',
 		align: 'right',
 		value: (row) => Math.round(row.place.longestRunMinutes)
