@@ -205,8 +205,8 @@ export function choiceRows(obstacle: Obstacle): ChoiceRow[] {
 			label: 'Leaves',
 			value: obstacle.leafTransmission === undefined ? 'all-year' : 'sheds',
 			options: [
-				{ value: 'all-year', label: 'all year the same' },
-				{ value: 'sheds', label: 'sheds them in autumn' }
+				{ value: 'all-year', label: 'all year' },
+				{ value: 'sheds', label: 'not in winter' }
 			],
 			change: (season) =>
 				season === 'sheds'
