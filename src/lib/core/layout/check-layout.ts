@@ -1,10 +1,19 @@
 import type { Layout, Plot, Tracker, TrackerModel } from '../document';
 import { groundSlopeWithin, steepestRise } from '../geometry/ground';
 import { lowestCornerM, reachRadiusM } from '../machine/reach';
+import { CellIndex } from './cell-index';
+import { obstacleContacts } from './obstacle-contacts';
 import { boundaryEdges, insideBoundary, segmentDistanceM } from './polygon';
 
 export type FindingKind =
-	'circles-overlap' | 'set-back' | 'outside' | 'double-tag' | 'low-corner' | 'steep-ground' | 'no-boundary';
+	| 'circles-overlap'
+	| 'set-back'
+	| 'outside'
+	| 'meets-obstacle'
+	| 'double-tag'
+	| 'low-corner'
+	| 'steep-ground'
+	| 'no-boundary';
 
 /** Something in a layout that should be looked at before it is built. */
 export interface Finding {
@@ -27,35 +36,9 @@ const AXIS_STEP_M = 0.05;
 /** Contacts within a millimetre are not findings: points come from grids with rounding. */
 const SLACK_M = 0.001;
 
-/** Buckets of a plan by square cells, so that near things are found without asking everything. */
-class CellIndex {
-	private readonly cells = new Map<string, number[]>();
-
-	constructor(private readonly sizeM: number) {}
-
-	private cell(value: number): number {
-		return Math.floor(value / this.sizeM);
-	}
-
-	addBox(index: number, west: number, south: number, east: number, north: number): void {
-		for (let x = this.cell(west); x <= this.cell(east); x++) {
-			for (let y = this.cell(south); y <= this.cell(north); y++) {
-				const key = `${x} ${y}`;
-				const list = this.cells.get(key);
-				if (list) list.push(index);
-				else this.cells.set(key, [index]);
-			}
-		}
-	}
-
-	at(x: number, y: number): readonly number[] {
-		return this.cells.get(`${this.cell(x)} ${this.cell(y)}`) ?? [];
-	}
-}
-
 const metres = (value: number): string => `${value.toFixed(2)} m`;
 
-interface Standing {
+export interface Standing {
 	tracker: Tracker;
 	model: TrackerModel;
 	reach: number;
@@ -152,6 +135,20 @@ function tagFindings(trackers: readonly Tracker[]): Finding[] {
 	return findings;
 }
 
+function obstacleFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
+	return obstacleContacts(plot, standing).map(({ tracker, obstacle, part, inside, intoM }) => {
+		const what = part === 'body' ? obstacle.name : `the ${part} of ${obstacle.name}`;
+		return {
+			kind: 'meets-obstacle',
+			trackerIds: [tracker.id],
+			message: inside
+				? `${tracker.tag} stands inside ${what}: its reach circle meets it by ${metres(intoM)}.`
+				: `${tracker.tag}: its reach circle meets ${what} by ${metres(intoM)}.`,
+			amountM: intoM
+		};
+	});
+}
+
 /** Trackers of one model and axis height; on uneven ground the steepest foot speaks for them. */
 function cornerFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
 	const groups = new Map<string, { ids: string[]; model: TrackerModel; axisM: number; lowest: number }>();
@@ -222,7 +219,7 @@ function steepFindings(plot: Plot, standing: readonly Standing[]): Finding[] {
 
 /**
  * What is wrong or doubtful with a layout on its plot: circles that overlap, set-backs broken (holes included), trackers
- * outside, tags used twice, corners near the ground, steep ground. Trackers whose model is missing are passed over. Two thousand
+ * outside, obstacles within reach, tags used twice, corners near the ground, steep ground. Trackers whose model is missing are passed over. Two thousand
  * trackers take a few milliseconds: near things are found through cells.
  */
 export function checkLayout(plot: Plot, layout: Layout): Finding[] {
@@ -253,6 +250,7 @@ export function checkLayout(plot: Plot, layout: Layout): Finding[] {
 	}
 	findings.push(
 		...overlapFindings(standing, largest),
+		...obstacleFindings(plot, standing),
 		...cornerFindings(plot, standing),
 		...steepFindings(plot, standing)
 	);

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import type { BoundaryPart, PlanPoint, Plot } from '../document';
+import type { BoundaryPart, Obstacle, PlanPoint, Plot } from '../document';
 import { reachRadiusM } from '../machine/reach';
 import { testLayout, testModel, testPlot, testTracker } from '../test-field';
 import { checkLayout } from './check-layout';
@@ -223,6 +223,101 @@ describe('checking a layout', () => {
 		expect(pairs).toBeGreaterThan(10);
 		expect(found.filter((f) => f.kind === 'circles-overlap')).toHaveLength(pairs);
 		expect(found.filter((f) => f.kind === 'set-back')).toHaveLength(near);
+	});
+});
+
+describe('obstacles within reach', () => {
+	// Reach 3.606 m, corners from 1 m to 5 m above the foot.
+	const met = (obstacle: Obstacle, trackers = [testTracker(0, 0, 0)], ground?: Plot['ground']) =>
+		checkLayout(testPlot({ obstacles: [obstacle], ...(ground && { ground }) }), testLayout(trackers)).filter(
+			({ kind }) => kind === 'meets-obstacle'
+		);
+	const barn = (eastM: number, heightM: number): Obstacle => ({
+		id: 'b',
+		kind: 'box',
+		name: 'Barn',
+		eastM,
+		northM: 0,
+		sizeXM: 4,
+		sizeYM: 8,
+		heightM,
+		turnDeg: 0
+	});
+	const tree = (eastM: number, crownBaseM: number): Obstacle => ({
+		id: 't',
+		kind: 'tree',
+		name: 'Oak',
+		eastM,
+		northM: 0,
+		heightM: 12,
+		crownBaseM,
+		crownRadiusM: 3,
+		trunkRadiusM: 0.4,
+		crownTransmission: 0.2,
+		growthMPerYear: 0,
+		maxHeightM: 12
+	});
+
+	it('names tracker and obstacle, and by how much', () => {
+		const [finding] = met(barn(5, 3));
+		// The barn's side is 3 m away.
+		expect(finding.message).toBe('A01: its reach circle meets Barn by 0.61 m.');
+		expect(finding.amountM).toBeCloseTo(Math.hypot(3, 2) - 3, 9);
+		expect(finding.trackerIds).toEqual(['t0']);
+		expect(met(barn(5.61, 3))).toEqual([]);
+	});
+
+	it('passes over what stays below the lowest corner, unless the pole stands in it', () => {
+		expect(met(barn(5, 0.9))).toEqual([]);
+		expect(met(barn(5, 1.1))).toHaveLength(1);
+		expect(met(barn(1, 0.9))[0].message).toContain('A01 stands inside Barn');
+		// Half a metre lower, the same kerb reaches the corners no more.
+		const falling: Plot['ground'] = { kind: 'plane', heightM: 0, risePercent: 10, riseTowardsDeg: 270 };
+		expect(met(barn(5, 1.1), undefined, falling)).toEqual([]);
+	});
+
+	it('meets a crown that hangs lower than the machine stands, else the trunk alone', () => {
+		expect(met(tree(6, 4.9))[0].message).toContain('the crown of Oak by 0.61 m');
+		expect(met(tree(6, 5.1))).toEqual([]);
+		expect(met(tree(3, 5.1))[0].message).toContain('the trunk of Oak by 1.01 m');
+	});
+
+	it('meets walls, masts and buildings', () => {
+		const at = { id: 'o', name: 'It', eastM: 0, northM: 3, heightM: 2 };
+		const line: PlanPoint[] = [
+			[-40, 0],
+			[40, 0]
+		];
+		expect(met({ ...at, kind: 'wall', line, thicknessM: 0.2, transmission: 0 })[0].amountM).toBeCloseTo(
+			Math.hypot(3, 2) - 2.9,
+			6
+		);
+		expect(met({ ...at, kind: 'mast', radiusM: 0.1 })[0].amountM).toBeCloseTo(Math.hypot(3, 2) - 2.9, 9);
+		const corners: PlanPoint[] = [
+			[-5, 0],
+			[5, 0],
+			[5, 6],
+			[-5, 6]
+		];
+		expect(met({ ...at, kind: 'building', corners, roof: { kind: 'flat' } })[0].amountM).toBeCloseTo(
+			Math.hypot(3, 2) - 3,
+			9
+		);
+	});
+
+	it('agrees with asking every tracker', () => {
+		const trackers = Array.from({ length: 2000 }, (_, k) =>
+			testTracker(k, (k * 37.7) % 140, (k * 53.3) % 131, { tag: `X${k}` })
+		);
+		const reach = Math.hypot(3, 2);
+		const near = trackers.filter(
+			({ eastM, northM }) =>
+				Math.hypot(Math.max(0, Math.abs(eastM - 60) - 2), Math.max(0, Math.abs(northM) - 4)) < reach - 0.001
+		);
+		expect(near.length).toBeGreaterThan(2);
+		expect(met(barn(60, 4), trackers).flatMap(({ trackerIds }) => trackerIds)).toEqual(
+			near.map(({ id }) => id)
+		);
 	});
 });
 

@@ -90,6 +90,23 @@ export function lowestCornerM(
 	return lowest;
 }
 
+/**
+ * Greatest height of an edge of the steel above the foot of the pole in any posture, metres. `axisHeightM` overrides the
+ * model's when it is given, and `posture` adds the tilt of a tracker that stands still.
+ */
+export function highestCornerM(model: TrackerModel, axisHeightM?: number | null, posture?: Posture): number {
+	const axis = axisHeightM ?? model.axisHeightM;
+	const range = tiltRange(model, posture);
+	let highest = -Infinity;
+	for (const side of [-1, 1]) {
+		const slope = model.centreShiftM + side * (model.heightM / 2 + model.frameMarginM);
+		for (const t of extremeTilts(slope, model.tableOffsetM, range)) {
+			highest = Math.max(highest, axis + slope * Math.sin(t) + model.tableOffsetM * Math.cos(t));
+		}
+	}
+	return highest;
+}
+
 /** Least distance between two equal machines, metres: two reach circles and the clearance between them. */
 export function leastPitchM(model: TrackerModel, clearanceM = 0.5): number {
 	return 2 * reachRadiusM(model) + clearanceM;

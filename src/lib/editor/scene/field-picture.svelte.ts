@@ -15,7 +15,7 @@ import type { TableQuad } from '../kernels/ray-pick';
 import { setBackLine } from '../kernels/set-back-line';
 import type { ProjectStore } from '../project-store.svelte';
 
-const contactKinds: Finding['kind'][] = ['circles-overlap', 'set-back', 'outside'];
+const contactKinds: Finding['kind'][] = ['circles-overlap', 'set-back', 'outside', 'meets-obstacle'];
 /** Below this the sun throws shadows too long to mean anything to the eye. */
 const leastSunDeg = 0.5;
 
