@@ -146,7 +146,10 @@ function drawCoordinates(pen: Pen, content: PlanContent, x: number, y: number, w
 	for (const sentence of [
 		`Local grid in metres, E east and N north of the origin (small circled cross) at ${origin}, WGS84.`,
 		'Grid north is true north at the origin; distances are on the ground (transverse Mercator about the origin, scale 1). Bearings run clockwise from true north.',
-		`Magnetic north ${declinationInWords(place.magneticDeclinationDeg)}, as entered for the project.`,
+		// Zero is also what stands there while nobody has entered any: nothing is said then.
+		...(place.magneticDeclinationDeg === 0
+			? []
+			: [`Magnetic north ${declinationInWords(place.magneticDeclinationDeg)}, as entered for the project.`]),
 		`Levels in metres above the project’s height datum: level 0.00 is ${formatNumber(place.altitudeM, 1)} m above sea level as entered. ${rise}`
 	]) {
 		top = pen.paragraph('words', [x, top], w, sentence) + 0.7;

@@ -5,7 +5,7 @@ import { sheetColours as c } from './sheet-colours';
 
 /**
  * True-north arrow straight up the paper with magnetic north beside it, turned by the declination that the project
- * holds. The local grid's north is true north at the origin.
+ * holds; without it where that is 0, which also stands for never entered. The local grid's north is true north at the origin.
  */
 export function drawNorth(pen: Pen, foot: PaperPoint, lengthMm: number, declinationDeg: number): void {
 	const [x, y] = foot;
@@ -33,6 +33,8 @@ export function drawNorth(pen: Pen, foot: PaperPoint, lengthMm: number, declinat
 		{ fill: { colour: c.white }, stroke: { colour: c.ink, widthMm: 0.25 } }
 	);
 	pen.text('words', [x, y - lengthMm - 1.4], 'N', { capMm: 3.4, weight: 800, anchor: 'middle' });
+	pen.text('words', [x, y + 3.6], 'true', { anchor: 'middle', weight: 600 });
+	if (declinationDeg === 0) return;
 	const mx = x + 17;
 	const a = (declinationDeg * Math.PI) / 180;
 	const reach = lengthMm * 0.72;
@@ -40,7 +42,6 @@ export function drawNorth(pen: Pen, foot: PaperPoint, lengthMm: number, declinat
 	pen.line('words', [mx, y], tip, { colour: c.inkSoft, widthMm: 0.3 });
 	pen.line('words', [mx, y], [mx, y - reach], { colour: c.hair, widthMm: 0.2, dashMm: [1, 1] });
 	pen.arrowHead('words', tip, declinationDeg, 4, c.inkSoft);
-	pen.text('words', [x, y + 3.6], 'true', { anchor: 'middle', weight: 600 });
 	pen.text('words', [mx, y + 3.6], 'magnetic', { anchor: 'middle', colour: c.inkSoft });
 }
 
