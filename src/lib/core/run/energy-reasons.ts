@@ -91,7 +91,7 @@ function weatherReason(input: RunInput): EnergyReason {
 		return {
 			id: 'weather',
 			words:
-				'A year without a cloud is no forecast: it is the most that can come. Shade costs more of it than of a real year, whose light comes more evenly from the sky.',
+				'A year without a cloud is no forecast: clouds take light from every real year. A clear sky sends more light at mid-day and a larger part of it as beam than a cloudy one, so the share lost to shade may come out smaller or larger than under clouds. Monthly sums or a weather file say what shade costs under the clouds of the place.',
 			lessPoints: null,
 			morePoints: 0
 		};
