@@ -132,7 +132,7 @@ describe('average year', () => {
 		expect(averageYear(42, [...sums.slice(0, 11), 440])).toMatchObject({
 			ok: false,
 			month: 11,
-			message: expect.stringMatching(/month 12 is 440 kWh/)
+			message: expect.stringMatching(/sum of December is 440 kWh/)
 		});
 		expect(averageYear(42, [-1, ...sums.slice(1)])).toMatchObject({ ok: false, month: 0 });
 		expect(averageYear(42, [Number.NaN, ...sums.slice(1)])).toMatchObject({ ok: false, month: 0 });

@@ -50,6 +50,21 @@ export const MEAN_DAYS = [17, 47, 75, 105, 135, 162, 198, 228, 258, 288, 318, 34
 /** Days of each month; February without its leap day. */
 export const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
+const MONTHS = [
+	'January',
+	'February',
+	'March',
+	'April',
+	'May',
+	'June',
+	'July',
+	'August',
+	'September',
+	'October',
+	'November',
+	'December'
+] as const;
+
 /**
  * Average year from the twelve monthly sums of global horizontal irradiation, kWh/m², January first: the diffuse part of
  * each month by Erbs, Klein and Duffie 1982, global by Collares-Pereira and Rabl 1979 and diffuse by Liu and Jordan
@@ -80,7 +95,7 @@ export function averageYear(
 			return {
 				ok: false,
 				month,
-				message: `The sum of month ${month + 1} is ${given} kWh/m²; it must lie from 0 to ${(outsideKwh * 0.9).toFixed(1)}, nine tenths of what arrives outside the air at this latitude.`,
+				message: `The sum of ${MONTHS[month]} is ${given} kWh/m²; it must lie from 0 to ${(outsideKwh * 0.9).toFixed(1)}, nine tenths of what arrives outside the air at this latitude.`,
 				remedy:
 					'Give the month’s sum on level ground in kWh/m² (a daily mean times the days of the month; MJ/m² divided by 3.6).'
 			};
