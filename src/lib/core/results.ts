@@ -161,8 +161,8 @@ export interface EnergyResult {
 		/** Light without shade by month, kWh/m². */
 		monthlyWithoutKwhM2: number[];
 		/**
-		 * Light after all losses over 1 kW/m², hours: the reference yield of IEC 61724-1. It holds no losses of modules,
-		 * cables and inverters.
+		 * Light after shade and strings over 1 kW/m², hours at full load. It holds no losses of modules, cables and
+		 * inverters; the reference yield of IEC 61724-1 is taken before any loss.
 		 */
 		referenceYieldH: EnergyRange;
 		/** Rated power of all tables, kW. */

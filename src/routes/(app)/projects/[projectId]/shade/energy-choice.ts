@@ -1,15 +1,17 @@
-import { monthNames } from '$lib/charts/months';
+import { longMonthNames } from '$lib/charts/months';
 import {
 	checkEnergy,
 	defaultLinkeTurbidity,
 	weatherClosure,
 	weatherSky,
 	type Closure,
+	type EnergyReason,
+	type EnergyResult,
 	type EnergySky,
 	type Place
 } from '$lib/core';
 import { readWeather } from '$lib/exchange/weather';
-import { formatNumber } from '$lib/i18n';
+import { formatNumber, formatPercent } from '$lib/i18n';
 import type { EnergyRequest, Run } from '$lib/schema';
 
 type WeatherSky = Extract<EnergySky, { source: 'weather' }>;
@@ -20,6 +22,8 @@ export interface EnergyChoice {
 	turbidity: (number | null)[];
 	/** kWh/m² on level ground. */
 	sums: (number | null)[];
+	/** Name of the place whose weather file the last run took, empty when it had none; null when it took no file. */
+	lastFile: string | null;
 	weather: { fileName: string; sky: WeatherSky; sentence: string; warnings: string[] } | null;
 	skyModel: string;
 	albedo: number | null;
@@ -29,9 +33,10 @@ export interface EnergyChoice {
 export function energyChoice(place: Place, last: Run['energy'] | undefined): EnergyChoice {
 	const months = Array<number | null>(12).fill(null);
 	return {
-		kind: last && last.source !== 'weather' ? last.source : 'none',
+		kind: last?.source ?? 'none',
 		turbidity: last?.linkeTurbidity ?? defaultLinkeTurbidity(place.latitudeDeg),
 		sums: last?.monthlyHorizontalKwhM2 ?? months,
+		lastFile: last?.source === 'weather' ? (last.name ?? '') : null,
 		weather: null,
 		skyModel: last?.skyModel ?? 'hay-davies',
 		albedo: typeof last?.albedo === 'number' ? last.albedo : 0.2
@@ -74,7 +79,12 @@ function skyOf(choice: EnergyChoice): EnergySky | string | null {
 				: `Give the monthly sum of ${missingOf(choice.sums)}.`;
 		}
 		case 'weather':
-			return choice.weather?.sky ?? 'Choose a weather file, EPW or TMY3.';
+			return (
+				choice.weather?.sky ??
+				(choice.lastFile === null
+					? 'Choose a weather file, EPW or TMY3.'
+					: 'Give the weather file again: its hours are not kept on this page.')
+			);
 	}
 }
 
@@ -84,7 +94,7 @@ const whole = (values: readonly (number | null)[]): number[] | null => {
 };
 
 const missingOf = (values: readonly (number | null)[]): string =>
-	monthNames[values.findIndex((value) => value === null)];
+	longMonthNames[values.findIndex((value) => value === null)];
 
 /** Reads a dropped or chosen weather file; the sentence says what was read and how well its columns agree. */
 export async function takeWeather(
@@ -114,4 +124,52 @@ export function closureWords(closure: Closure | null): string {
 	return rmsWm2 > DOUBTFUL_WM2
 		? `Global light and the sum of diffuse and direct are far apart (${figures}): look at its time zone and place.`
 		: `Global light and the sum of diffuse and direct agree: ${figures}.`;
+}
+
+const shortReasons: Record<EnergyReason['id'], string> = {
+	strings: 'wiring of the strings',
+	'sky-model': 'model of the sky',
+	weather: 'weather of one year',
+	place: 'weather of another place',
+	heights: 'heights',
+	ground: 'light from the ground',
+	'sky-view': 'sky covered',
+	steps: 'time steps'
+};
+
+/** How far one reason may move what the field receives, in points of the light without shade. */
+export function reasonPoints({ lessPoints, morePoints }: EnergyReason): string {
+	const one = (value: number | null, sign: string) =>
+		value === null || value < 0.005 ? null : `${sign}${formatNumber(value, value < 0.1 ? 2 : 1)}`;
+	const less = one(lessPoints, '−');
+	const more = one(morePoints, '+');
+	if (less && more) return less.slice(1) === more.slice(1) ? `±${more.slice(1)}` : `${less} / ${more}`;
+	if (less || more) return less ?? more ?? '';
+	return lessPoints === null || morePoints === null ? 'not known' : 'below 0.01';
+}
+
+/** The reasons that the range by wiring leaves out, in a few words each. */
+export function otherReasonsWords(reasons: readonly EnergyReason[]): string {
+	return reasons
+		.filter(({ id }) => id !== 'strings')
+		.map((reason) => `${shortReasons[reason.id]} ${reasonPoints(reason)}`)
+		.join(', ');
+}
+
+/** Why the beam of the energy part and its loss are not those of the year's figures above it. */
+export function beamWords(
+	{ field: { with: lit, without } }: EnergyResult,
+	source: EnergySky['source'] | null,
+	yearBeamLoss: number
+): string {
+	const here =
+		source === 'clear'
+			? 'another clear sky, with haze by month (Ineichen and Perez 2002)'
+			: source === 'average'
+				? 'the given monthly sums, clouds included'
+				: source === 'weather'
+					? 'the hours of the weather file, clouds included'
+					: 'the sky named here';
+	const loss = without.beam > 0 ? 1 - lit.beam / without.beam : 0;
+	return `The year’s figures above take the beam of one clear sky (Meinel and Meinel 1976), this part takes that of ${here}. So ${formatPercent(yearBeamLoss, 2)} of the beam is lost there and ${formatPercent(loss, 2)} of the beam here. All other shares in this part are of all light: beam, sky and ground together.`;
 }

@@ -9,7 +9,7 @@ function lossColumn(key: string, label: string, of: (row: TrackerEnergy) => numb
 	return {
 		key,
 		label,
-		unit: '%',
+		unit: '% of all light',
 		align: 'right',
 		value: (row) => share(of(row)),
 		text: (row) => percent(of(row))
@@ -65,7 +65,7 @@ export function energyMonths({ field }: EnergyResult): EnergyMonth[] {
 const monthLoss = (key: 'beam' | 'sky' | 'electrical' | 'total', label: string): Column<EnergyMonth> => ({
 	key,
 	label,
-	unit: '%',
+	unit: '% of all light',
 	align: 'right',
 	value: (row) => share(row[key]),
 	text: (row) => percent(row[key])
