@@ -1,6 +1,19 @@
 /** Whether anything at all comes out wrong on scenes that nobody would draw. */
-import { fieldShade, mountScene, prepareField, shadeScene, type MountEdge } from '../../core';
+import {
+	fieldShade,
+	LiveDay,
+	mountScene,
+	moveTracker,
+	prepareField,
+	shadeScene,
+	shadeSums,
+	sunTable,
+	type Field,
+	type MountEdge,
+	type TableSun
+} from '../../core';
 import { distances, type Check, type Extent, type Row } from '../check';
+import { plainPlot, plainRun, plainTrackers } from './fields';
 import { randomField } from './random-fields';
 import { randomScene, randomSun } from './random-scenes';
 import { randomSource } from './random';
@@ -66,29 +79,99 @@ function tryField(random: Random): number {
 	return worst;
 }
 
-const TRIES: readonly (readonly [string, (random: Random) => number])[] = [
-	['scene', tryScene],
-	['field', tryField],
-	['scene', tryScene],
-	['mount', tryMount],
-	['scene', tryScene]
+const ROUNDING = 1e-7;
+const beyond = (off: number): number => (off <= ROUNDING ? 0 : Number.isNaN(off) ? Infinity : off);
+
+/** Regular, staggered and jittered grids of one kind of table. */
+function gridField(random: Random): Field {
+	const [columns, rows] = [2 + Math.floor(13 * random()), 2 + Math.floor(9 * random())];
+	const [eastM, northM] = [7.5 + 17.5 * random(), 7.5 + 17.5 * random()];
+	const stagger = random() < 0.3 ? 0.5 : 0;
+	const jitterM = random() < 0.4 ? 1.5 * random() : 0;
+	const places = Array.from({ length: columns * rows }, (_, k): [number, number] => {
+		const row = Math.floor(k / columns);
+		return [
+			((k % columns) + (row % 2) * stagger) * eastM + jitterM * (random() - 0.5),
+			row * northM + jitterM * (random() - 0.5)
+		];
+	});
+	const risePercent = random() < 0.3 ? 15 * random() : 0;
+	return prepareField(
+		plainRun(plainTrackers(places), {
+			plot: plainPlot({
+				ground: { kind: 'plane', heightM: 0, risePercent, riseTowardsDeg: 360 * random() }
+			})
+		})
+	);
+}
+
+/** Sums over suns as a year makes them, and a day that follows moves, against the plain question table by table. */
+function trySums(random: Random): number {
+	const field = gridField(random);
+	const { engine } = field;
+	const day = 1 + Math.floor(365 * random());
+	const suns = Array.from({ length: 3 }, (): TableSun => ({
+		...randomSun(random),
+		weight: 0.1 + random(),
+		bin: 0,
+		day
+	}));
+	const weight = suns.reduce((sum, sun) => sum + sun.weight, 0);
+	const lost = new Float64Array(engine.count);
+	for (const sun of suns) {
+		engine.setDay(day);
+		engine.setSun(sun.azimuthDeg, sun.elevationDeg, false);
+		for (let i = 0; i < engine.count; i++) {
+			const cosine = engine.cosine(i);
+			if (cosine > 0) lost[i] += sun.weight * cosine * engine.share(i);
+		}
+	}
+	let worst = 0;
+	const sums = shadeSums(engine, sunTable(suns), 1);
+	if (!sums) return Infinity;
+	lost.forEach((sum, i) => (worst = Math.max(worst, beyond(Math.abs(sum - sums.lost[i]) / weight))));
+
+	const live = new LiveDay(field, suns, day);
+	let moved = field;
+	for (let k = 0; k < 2; k++) {
+		const index = Math.floor(engine.count * random());
+		const { eastM, northM } = moved.layout.trackers[index];
+		const [east, north] = [eastM + 12 * (random() - 0.5), northM + 12 * (random() - 0.5)];
+		live.move(index, east, north);
+		moved = moveTracker(moved, index, east, north);
+	}
+	suns.forEach((sun, k) => {
+		fieldShade(moved, sun, day).forEach((share, i) => {
+			worst = Math.max(worst, beyond(Math.abs(share - live.shares[k][i])));
+		});
+	});
+	return worst;
+}
+
+/** What is tried, and how often in the tests; a hundredth of it while building. */
+const TRIES: readonly (readonly [kind: string, attempt: (random: Random) => number, count: number])[] = [
+	['scene', tryScene, 100_000],
+	['field', tryField, 8000],
+	['mount', tryMount, 8000],
+	['sums', trySums, 400]
 ];
 
 function* rows(extent: Extent): Generator<Row> {
-	const count = extent === 'whole' ? 100_000 : 1000;
-	for (let k = 0; k < count; k++) {
-		const [kind, attempt] = TRIES[k % TRIES.length];
-		// Each scene from its own seed, so that one can be looked at alone.
-		const random = randomSource(SEED + k);
-		let off: number;
-		try {
-			off = attempt(random);
-		} catch (error) {
-			// An exception is the very thing that is looked for: it is a value infinitely far off, with its words.
-			yield [`${kind} of seed ${SEED + k}: ${String(error)}`, Infinity, 0];
-			continue;
+	// Each from its own seed, so that one can be looked at alone.
+	let seed = SEED;
+	for (const [kind, attempt, count] of TRIES) {
+		for (let k = 0; k < (extent === 'whole' ? count : count / 100); k++) {
+			const random = randomSource(++seed);
+			let off: number;
+			try {
+				off = attempt(random);
+			} catch (error) {
+				// An exception is the very thing that is looked for: it is a value infinitely far off, with its words.
+				yield [`${kind} of seed ${seed}: ${String(error)}`, Infinity, 0];
+				continue;
+			}
+			yield [`${kind} of seed ${seed}`, off, 0];
 		}
-		yield [`${kind} of seed ${SEED + k}`, off, 0];
 	}
 }
 
@@ -96,7 +179,8 @@ export const fuzzChecks: Check[] = [
 	{
 		id: 'shade-fuzz',
 		effect: 'shade',
-		title: 'Random scenes and fields: no exception, no NaN, no share outside 0 to 1',
+		title:
+			'Random scenes, fields, sensors and sums over suns: no exception, no NaN, no share outside 0 to 1, every way to the same answer',
 		against: `nothing wrong at all: suns down to 0.0001° and in the zenith, tables that touch, coincide, straddle, stand edge-on, tiny and huge (seed ${SEED})`,
 		source: 'Definition of a share',
 		provenance: 'formula',

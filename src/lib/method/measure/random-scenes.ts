@@ -64,7 +64,8 @@ export function randomObstacle(random: Random): SceneObstacle {
 	return {
 		...at,
 		kind: 'prism',
-		sides: 3 + Math.floor(20 * random()),
+		// Now and then as many as a round tower drawn finely.
+		sides: 3 + Math.floor((random() < 0.06 ? 198 : 20) * random()),
 		bottomRadiusM: 0.05 + 5 * random(),
 		topRadiusM: random() < 0.4 ? 0 : 0.05 + 5 * random(),
 		heightM
