@@ -43,8 +43,10 @@ describe('words of the answers', () => {
 	});
 
 	it('tell a clear height, or that there is none to tell', () => {
-		expect(clearHeightSentence('The field', 28.16, 147)).toContain('above 28.2°');
-		expect(clearHeightSentence('A01', null, null)).toBe(
+		expect(clearHeightSentence('The field', 28.16, 147, 68.4)).toContain('above 28.2°');
+		expect(clearHeightSentence('The field', 68.44, 180, 68.45)).toContain('never clear in the year');
+		expect(clearHeightSentence('The field', 68.3, 180, 68.45)).toContain('is clear whenever');
+		expect(clearHeightSentence('A01', null, null, 68.4)).toBe(
 			'A01 is never shaded, wherever the sun of the year stands.'
 		);
 	});

@@ -48,15 +48,26 @@ export function windowWords(window: ClearWindow, timeZone: string): string {
 	return `${clock} by the clock, ${solar} solar${NBSP}time`;
 }
 
+/** Heights are refined to a hundredth; nearer to the highest sun than this is at it, degrees. */
+const AT_HIGHEST_DEG = 0.02;
+
+/** Whether shade lasts up to the highest sun of the year, so that no height of the sun is clear. */
+export const neverClear = (aboveDeg: number | null, highestSunDeg: number): boolean =>
+	aboveDeg !== null && aboveDeg >= highestSunDeg - AT_HIGHEST_DEG;
+
 /** Height of the sun above which nothing is shaded, as a sentence. */
 export function clearHeightSentence(
 	subject: string,
 	aboveDeg: number | null,
-	azimuthDeg: number | null
+	azimuthDeg: number | null,
+	highestSunDeg: number
 ): string {
 	if (aboveDeg === null || azimuthDeg === null)
 		return `${subject} is never shaded, wherever the sun of the year stands.`;
-	return `${subject} is clear whenever the sun stands above ${degreesWords(aboveDeg)}; the last shade comes with the sun at ${formatBearing(azimuthDeg)} (${fineWindName(azimuthDeg)}).`;
+	const bearing = `${formatBearing(azimuthDeg)} (${fineWindName(azimuthDeg)})`;
+	if (neverClear(aboveDeg, highestSunDeg))
+		return `${subject} is never clear in the year by the sun's height alone: there is shade up to the highest sun, ${degreesWords(highestSunDeg)}, at ${bearing}.`;
+	return `${subject} is clear whenever the sun stands above ${degreesWords(aboveDeg)}; the last shade comes with the sun at ${bearing}.`;
 }
 
 /** Why a tracker is among the worst: "B06, mostly on December mornings". */
@@ -71,5 +82,5 @@ export function reasonWords(tracker: TrackerAnswers): string {
 export function sampleWords(model: AnswersResult['model']): string {
 	return model.everyDays === 1
 		? 'every day of the year'
-		: `one day in ${model.everyDays}, ${model.days} days, each counted for the days around it: within 0.01 points of every day on the fields that are tested`;
+		: `one day in ${model.everyDays}, ${model.days} days, each counted for the days around it: within 0.01 points of every day on the fields that are tested, within 3${NBSP}% of a loss where trees shed leaves, whose change of leaf may fall between`;
 }

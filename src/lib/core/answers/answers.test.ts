@@ -6,6 +6,7 @@ import type { RunInput } from '../results';
 import { testGrid, testLayout, testModel, testPlace, testPlot, testTracker } from '../test-field';
 import { answersPart, answersYear, joinAnswers } from './answers-year';
 import { answerSuns } from './answer-suns';
+import { highestSunDeg } from './clear-height';
 import { lightLedger, removalOf } from './light-ledger';
 import { fieldChanges, MOVE_STEP_M, stepMoves, WAYS } from './which-way';
 
@@ -242,6 +243,10 @@ describe('which way to move', () => {
 	it('one metre the best way gains about what the derivative says, where it is smooth', () => {
 		const found = answersYear(runInput(testGrid(4, 3, 13, 11)))!;
 		expect(found.field.bestMoves.length).toBeGreaterThan(3);
+		const gains = found.field.bestMoves.map(
+			({ trackerId }) => found.trackers.find((each) => each.trackerId === trackerId)!.move.gainOfOneMetre!
+		);
+		expect(gains).toEqual([...gains].sort((a, b) => b - a));
 		for (const { trackerId } of found.field.bestMoves) {
 			const { move } = found.trackers.find((tracker) => tracker.trackerId === trackerId)!;
 			expect(move.gainOfOneMetre).toBeGreaterThan(0);
@@ -354,12 +359,39 @@ describe('the whole', () => {
 		}
 	}, 60_000);
 
+	it('the highest sun stands at noon of the longest day, overhead between the tropics', () => {
+		// 90 - 45 + 23.44, and 0.4 arc minutes of refraction.
+		expect(highestSunDeg(45)).toBeCloseTo(68.446, 2);
+		expect(highestSunDeg(-45)).toBe(highestSunDeg(45));
+		expect(highestSunDeg(10)).toBe(90);
+	});
+
 	it('one day in seven is within 0.01 points of every day', () => {
 		const input = runInput(testGrid(4, 3, 13, 11), { stepMinutes: 10 });
 		const sampled = answersYear(input)!;
 		const every = answersYear(input, undefined, { everyDays: 1 })!;
 		expect(every.model.days).toBe(365);
 		expect(Math.abs(sampled.field.beamLoss - every.field.beamLoss)).toBeLessThan(1e-4);
+	});
+
+	it('one day in seven tells losses within 3 % of themselves where trees shed leaves', () => {
+		const oaks = [-8, 6, 20].map((eastM, k): Plot['obstacles'][number] => ({
+			...tree,
+			id: `oak${k}`,
+			eastM,
+			northM: -9,
+			crownTransmission: 0.7,
+			leafTransmission: 0.05,
+			leafDays: [100, 305]
+		}));
+		const input = runInput(testGrid(3, 2, 13, 11), { plot: testPlot({ obstacles: oaks }), stepMinutes: 20 });
+		const sampled = answersYear(input)!;
+		const every = answersYear(input, undefined, { everyDays: 1 })!;
+		expect(every.field.beamLoss).toBeGreaterThan(0.01);
+		expect(Math.abs(sampled.field.beamLoss - every.field.beamLoss)).toBeLessThan(0.03 * every.field.beamLoss);
+		sampled.trackers.forEach(({ beamLoss }, i) =>
+			expect(Math.abs(beamLoss - every.trackers[i].beamLoss)).toBeLessThan(0.03 * every.trackers[i].beamLoss)
+		);
 	});
 
 	it('can be stopped, and tells how far it is', () => {

@@ -41,6 +41,15 @@ function sunComesTo(latitudeDeg: number, azimuthDeg: number, elevationDeg: numbe
 	return Math.abs(sine) <= Math.sin(MOST_DECLINATION_DEG * RADIANS_PER_DEGREE);
 }
 
+/**
+ * Apparent height of the highest sun of any year at a latitude (degrees, -90..90), degrees: 90 between the tropics. Within
+ * 0.01 degrees in this age. Neglected: the day's steps of the sun, which meets its highest at noon to within 0.01 degrees.
+ */
+export function highestSunDeg(latitudeDeg: number): number {
+	const airless = 90 - Math.max(0, Math.abs(latitudeDeg) - MOST_DECLINATION_DEG);
+	return Math.min(90, airless + refractionDeg(airless));
+}
+
 /** Whether the sun ever stands there, and clear of the skyline. */
 function isSun(field: Field, azimuthDeg: number, elevationDeg: number): boolean {
 	return (

@@ -1,2 +1,3 @@
 export type * from './results';
 export * from './answers-year';
+export { highestSunDeg } from './clear-height';

@@ -112,7 +112,7 @@ export interface AnswersResult {
 		clearProfile: { azimuthDeg: number; elevationDeg: number }[];
 		shortestDate: string;
 		window: ClearWindow | null;
-		/** Best moves of one tracker, each computed again with the tracker one metre away. */
+		/** Best moves of one tracker, each computed again with the tracker one metre away; greatest gain so computed first. */
 		bestMoves: { trackerId: string; tag: string }[];
 		worst: WorstTracker[];
 	};

@@ -1,4 +1,4 @@
-import { reasonWords, takerName } from '$lib/charts/answer-words';
+import { neverClear, reasonWords, takerName } from '$lib/charts/answer-words';
 import { longMonthNames } from '$lib/charts/months';
 import type { LightPair, TrackerAnswers } from '$lib/core';
 import { formatBearing, formatHours } from '$lib/i18n';
@@ -41,8 +41,8 @@ export const pairColumns: Column<LightPair>[] = [
 	}
 ];
 
-/** One row a tracker: who, when, up to which sun, which way. */
-export const answerColumns: Column<TrackerAnswers>[] = [
+/** One row a tracker: who, when, up to which sun, which way. `highestSunDeg`: highest sun of the year at the place. */
+export const answerColumns = (highestSunDeg: number): Column<TrackerAnswers>[] => [
 	{ key: 'tag', label: 'Tracker', value: (row) => row.tag },
 	{
 		key: 'loss',
@@ -67,7 +67,12 @@ export const answerColumns: Column<TrackerAnswers>[] = [
 		unit: '°',
 		align: 'right',
 		value: (row) => (row.clearAboveDeg === null ? null : Math.round(row.clearAboveDeg * 100) / 100),
-		text: (row) => (row.clearAboveDeg === null ? '–' : row.clearAboveDeg.toFixed(2))
+		text: (row) =>
+			row.clearAboveDeg === null
+				? '–'
+				: neverClear(row.clearAboveDeg, highestSunDeg)
+					? 'never'
+					: row.clearAboveDeg.toFixed(2)
 	},
 	{
 		key: 'window',
@@ -95,6 +100,14 @@ export const answerColumns: Column<TrackerAnswers>[] = [
 		unit: '% of field',
 		align: 'right',
 		value: (row) => percent(row.move.gainOfOneMetre ?? row.move.gainPerMetre, 5),
-		text: (row) => ((row.move.gainOfOneMetre ?? row.move.gainPerMetre) * 100).toFixed(4)
+		text: (row) =>
+			row.move.gainOfOneMetre === null
+				? `≈ ${(row.move.gainPerMetre * 100).toFixed(4)}`
+				: (row.move.gainOfOneMetre * 100).toFixed(4)
+	},
+	{
+		key: 'gainBy',
+		label: 'The gain is',
+		value: (row) => (row.move.gainOfOneMetre === null ? 'estimated' : 'computed')
 	}
 ];
