@@ -92,7 +92,10 @@ export const shadeEffects = [
 			'For every tracker the year is asked again with one neighbour away: what that gives back is what the neighbour takes. Which way to move is told from exact differences of the loss by a small step east and north. One day in seven is looked at.',
 		sources: ['Loss with all minus loss without one; finite differences of 0.1 m'],
 		neglected: [
-			{ what: 'Days between the ones that are looked at', howBig: 'within 0.01 points of every day; within 3 % of a loss where trees shed leaves' },
+			{
+				what: 'Days between the ones that are looked at',
+				howBig: 'within 0.01 points of every day; within 3 % of a loss where trees shed leaves'
+			},
 			{
 				what: 'Shadows that overlap belong to nobody alone',
 				howBig: 'removals need not add up to the loss: both are shown'
