@@ -18,7 +18,8 @@ test('method and checks: from the account menu, measured in this build, found by
 	expect(await effects.count()).toBeGreaterThan(14);
 	const shade = page.getByRole('article', { name: 'Exact shade' });
 	await expect(shade.getByText(/allowed 10⁻⁹/).first()).toBeVisible();
-	await expect(shade.getByRole('listitem').filter({ hasText: 'polyclip-ts' })).toBeVisible();
+	// Cutting, uniting and the rectangles of alike tables, each against the same library.
+	await expect(shade.getByRole('listitem').filter({ hasText: 'polyclip-ts' })).toHaveCount(3);
 
 	// Contents lead to a section.
 	await page
