@@ -1,3 +1,5 @@
+import { MONTH_NAMES } from '$lib/core';
+
 /** Short names of the months, January first. */
 export const monthNames = [
 	'Jan',
@@ -15,17 +17,4 @@ export const monthNames = [
 ] as const;
 
 /** Names of the months for sentences, January first. */
-export const longMonthNames = [
-	'January',
-	'February',
-	'March',
-	'April',
-	'May',
-	'June',
-	'July',
-	'August',
-	'September',
-	'October',
-	'November',
-	'December'
-] as const;
+export const longMonthNames = MONTH_NAMES;

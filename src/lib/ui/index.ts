@@ -5,6 +5,7 @@ export { default as ChoiceField } from './ChoiceField.svelte';
 export { default as DataTable } from './DataTable.svelte';
 export { default as Dialog } from './Dialog.svelte';
 export { default as EmptyState } from './EmptyState.svelte';
+export { default as FigureRow } from './FigureRow.svelte';
 export { default as Field } from './Field.svelte';
 export { default as LinkButton } from './LinkButton.svelte';
 export { default as Mark } from './Mark.svelte';

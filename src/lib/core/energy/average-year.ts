@@ -50,7 +50,8 @@ export const MEAN_DAYS = [17, 47, 75, 105, 135, 162, 198, 228, 258, 288, 318, 34
 /** Days of each month; February without its leap day. */
 export const MONTH_DAYS = [31, 28, 31, 30, 31, 30, 31, 31, 30, 31, 30, 31] as const;
 
-const MONTHS = [
+/** Names of the months for sentences, January first. */
+export const MONTH_NAMES = [
 	'January',
 	'February',
 	'March',
@@ -95,7 +96,7 @@ export function averageYear(
 			return {
 				ok: false,
 				month,
-				message: `The sum of ${MONTHS[month]} is ${given} kWh/m²; it must lie from 0 to ${(outsideKwh * 0.9).toFixed(1)}, nine tenths of what arrives outside the air at this latitude.`,
+				message: `The sum of ${MONTH_NAMES[month]} is ${given} kWh/m²; it must lie from 0 to ${(outsideKwh * 0.9).toFixed(1)}, nine tenths of what arrives outside the air at this latitude.`,
 				remedy:
 					'Give the month’s sum on level ground in kWh/m² (a daily mean times the days of the month; MJ/m² divided by 3.6).'
 			};

@@ -63,10 +63,10 @@ export class AlikeView {
 		const ny = axes[offset + 7];
 		const nz = axes[offset + 8];
 		// On level ground, with the level axis square to the light, whoever falls higher stands behind.
-		const below = this.level && Math.abs(nx * ux + ny * uy) < 1e-12;
+		const sides = this.level && Math.abs(nx * ux + ny * uy) < 1e-12 ? 1 : 2;
 		const { x, y, cell, sortedX, sortedY, sortedAhead, order } = this;
 		let west = Infinity;
-		let east1 = -Infinity;
+		let farEast = -Infinity;
 		let low = Infinity;
 		let high = -Infinity;
 		for (let i = 0; i < count; i++) {
@@ -75,13 +75,13 @@ export class AlikeView {
 			x[i] = px;
 			y[i] = py;
 			if (px < west) west = px;
-			if (px > east1) east1 = px;
+			if (px > farEast) farEast = px;
 			if (py < low) low = py;
 			if (py > high) high = py;
 		}
 		const most = MOST_CELLS_A_TABLE * count + 4;
-		const stripWidth = Math.max(wide, (2 * (east1 - west)) / most);
-		const strips = Math.floor((east1 - west) / stripWidth) + 1;
+		const stripWidth = Math.max(wide, (2 * (farEast - west)) / most);
+		const strips = Math.floor((farEast - west) / stripWidth) + 1;
 		// Rows of which three cells hold about so many tables, never taller than a shadow reaches.
 		const wanted = (TABLES_A_LOOK * (high - low) * strips) / (3 * count);
 		const rowHeight = Math.max(
@@ -131,36 +131,19 @@ export class AlikeView {
 				const limit = sortedAhead[p] + UP_SUN_M;
 				const c = cell[i] - r * columns;
 				let hits = 0;
-				let left = -Infinity;
-				let right = Infinity;
-				const last = r - reach > 0 ? r - reach : 0;
-				for (let row = r; row >= last; row--) {
-					const end = starts[row * columns + c + 2];
-					for (let k = starts[row * columns + c - 1]; k < end; k++) {
-						const sy = sortedY[k] - py;
-						if (sy <= -tall || sy > 0) continue;
-						const sx = sortedX[k] - px;
-						if (sx >= wide || sx <= -wide) continue;
-						if (sortedAhead[k] <= limit) continue;
-						if (hits === union.x.length) union.grow();
-						union.x[hits] = sx;
-						union.y[hits++] = sy;
-						if (sx <= 0) {
-							if (sx > left) left = sx;
-						} else if (sx < right) right = sx;
-					}
-					if (left + steelHalfWidth >= halfWidth || right - steelHalfWidth <= left + steelHalfWidth) break;
-					if (right - steelHalfWidth <= -halfWidth) break;
-				}
-				if (!below) {
-					left = -Infinity;
-					right = Infinity;
-					const top = r + reach < rows - 1 ? r + reach : rows - 1;
-					for (let row = r; row <= top; row++) {
+				for (let side = 0; side < sides; side++) {
+					// First what falls at its own height and below, then what falls above.
+					const step = side === 0 ? -1 : 1;
+					const stop = Math.max(-1, Math.min(rows, r + step * (reach + 1)));
+					const least = side === 0 ? -tall : 0;
+					const greatest = side === 0 ? 0 : tall;
+					let left = -Infinity;
+					let right = Infinity;
+					for (let row = r; row !== stop; row += step) {
 						const end = starts[row * columns + c + 2];
 						for (let k = starts[row * columns + c - 1]; k < end; k++) {
 							const sy = sortedY[k] - py;
-							if (sy >= tall || sy <= 0) continue;
+							if (sy <= least || sy > greatest) continue;
 							const sx = sortedX[k] - px;
 							if (sx >= wide || sx <= -wide) continue;
 							if (sortedAhead[k] <= limit) continue;
